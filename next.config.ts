@@ -1,0 +1,9 @@
+import type { NextConfig } from 'next';
+
+const config: NextConfig = {
+  poweredByHeader: false,
+  reactCompiler: true,
+  typedRoutes: true,
+};
+
+export default config;
