@@ -62,7 +62,11 @@ export function baseUnitsPer(unit: ConcentrationUnit): number {
  * @param value in `from`, ≥ 0
  * @returns the value in `to`, or null where the two units are of different kinds
  */
-export function convertConcentration(value: number, from: ConcentrationUnit, to: ConcentrationUnit): number | null {
+export function convertConcentration(
+  value: number,
+  from: ConcentrationUnit,
+  to: ConcentrationUnit,
+): number | null {
   if (concentrationKind(from) !== concentrationKind(to)) return null;
   return from === to ? value : (value * BASE_UNITS_PER[from]) / BASE_UNITS_PER[to];
 }
