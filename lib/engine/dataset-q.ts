@@ -4,7 +4,7 @@
  * Woodbury identity twice, within the series and across them; nothing of the size points × points exists.
  */
 import type { QStatistic } from './assessment';
-import { choleskyInPlace, choleskySemidefinite, solveLower, solveLowerTransposed } from './linear-algebra';
+import { choleskyOfUnitPlus, choleskySemidefinite, solveLower, solveLowerTransposed } from './linear-algebra';
 import { LowRankNoise } from './low-rank-noise';
 import {
   degreesOfFreedomOf,
@@ -140,7 +140,7 @@ function couplingCore(blocks: readonly Block[], count: number): Float64Array {
       }
     }
   }
-  choleskyInPlace(core, count);
+  choleskyOfUnitPlus(core, count);
   return core;
 }
 

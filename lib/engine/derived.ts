@@ -138,8 +138,9 @@ function concentrationOf(
   const gradient = new Float64Array(energyGradient.length);
   addScaledGradient(model, state, gradient, 0, quantities);
   const logGradient = gradient.map((value, k) => (energyGradient[k] - value) / slope);
-  const relative = estimate(model, 1, logGradient).u;
-  return { c, logGradient, estimate: { value: c, u: c * relative } };
+  const u = c * estimate(model, 1, logGradient).u;
+  // Where the response is flat to the last bit, its midpoint has no place.
+  return Number.isFinite(u) ? { c, logGradient, estimate: { value: c, u } } : null;
 }
 
 /** EC50 and the effective Hill coefficient there. */
@@ -173,7 +174,9 @@ function midpoint(
     const ofRange = (full.gradient[k] - leak.gradient[k]) / range;
     return hill * (((1 - 2 * p) * pGradient[k]) / (p * rest) + ofSlope - ofRange);
   });
-  return { ec50: found.estimate, effectiveHill: estimate(model, hill, gradient) };
+  const effectiveHill = estimate(model, hill, gradient);
+  if (!Number.isFinite(hill) || !Number.isFinite(effectiveHill.u)) return none;
+  return { ec50: found.estimate, effectiveHill };
 }
 
 /** ∂²f/∂(ln c)² = −Σ n_s (x_I(1 − x_I) − x_A(1 − x_A)), x the occupancies by this ligand alone. */

@@ -37,13 +37,17 @@ export function choleskySemidefinite(
   return { factor, semidefinite };
 }
 
-/** Overwrites a symmetric positive definite matrix (n×n) with its lower Cholesky factor; the upper part is left. */
-export function choleskyInPlace(matrix: Float64Array, n: number): void {
+/**
+ * Overwrites 1 + S, S symmetric positive semi-definite (n×n), with its lower Cholesky factor; the upper part
+ * is left. Every pivot of such a matrix is at least 1; where S is so large and its columns so alike that
+ * rounding says otherwise, the pivot is taken as 1.
+ */
+export function choleskyOfUnitPlus(matrix: Float64Array, n: number): void {
   for (let j = 0; j < n; j++) {
     const rowJ = j * n;
     let pivot = matrix[rowJ + j];
     for (let k = 0; k < j; k++) pivot -= matrix[rowJ + k] * matrix[rowJ + k];
-    const root = Math.sqrt(pivot);
+    const root = Math.sqrt(Math.max(pivot, 1));
     matrix[rowJ + j] = root;
     for (let i = j + 1; i < n; i++) {
       const rowI = i * n;

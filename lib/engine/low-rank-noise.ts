@@ -6,7 +6,7 @@
  *
  * Source: Woodbury, Inverting modified matrices, Princeton Statistical Research Group, Memo 42 (1950).
  */
-import { choleskyInPlace, solveLower, solveLowerTransposed } from './linear-algebra';
+import { choleskyOfUnitPlus, solveLower, solveLowerTransposed } from './linear-algebra';
 
 export class LowRankNoise {
   private readonly count: number;
@@ -39,7 +39,7 @@ export class LowRankNoise {
         for (let b = 0; b <= a; b++) core[a * rank + b] += weighted * factor[row + b];
       }
     }
-    choleskyInPlace(core, rank);
+    choleskyOfUnitPlus(core, rank);
     return core;
   }
 
