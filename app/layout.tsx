@@ -1,0 +1,43 @@
+import type { Metadata, Viewport } from 'next';
+import { cookies } from 'next/headers';
+import type { ReactNode } from 'react';
+import { SiteFooter } from '@/components/layout/site-footer';
+import { SiteHeader } from '@/components/layout/site-header';
+import { SkipLink } from '@/components/layout/skip-link';
+import { parseTheme, THEME_COOKIE } from '@/components/layout/theme';
+import { fontClasses } from './fonts';
+import './globals.css';
+import { Providers } from './providers';
+import { setTheme } from './set-theme';
+
+export const metadata: Metadata = {
+  title: { default: 'Curvekeep: one master curve for allosteric data', template: '%s · Curvekeep' },
+  description:
+    'Checks activity data of allosteric proteins against the two-state master curve, from the parameters that the laboratory itself states.',
+};
+
+export const viewport: Viewport = {
+  themeColor: [
+    { media: '(prefers-color-scheme: light)', color: '#fafbfa' },
+    { media: '(prefers-color-scheme: dark)', color: '#0f171d' },
+  ],
+};
+
+/** Reading the cookie makes every page dynamic, which the nonce of the content policy needs. */
+export default async function RootLayout({ children }: { children: ReactNode }) {
+  const theme = parseTheme((await cookies()).get(THEME_COOKIE)?.value);
+  return (
+    <html lang="en-GB" className={fontClasses} data-theme={theme === 'system' ? undefined : theme}>
+      <body className="flex flex-col">
+        <SkipLink />
+        <SiteHeader />
+        <Providers>
+          <main id="main" tabIndex={-1} className="flex grow flex-col outline-none">
+            {children}
+          </main>
+        </Providers>
+        <SiteFooter theme={theme} setTheme={setTheme} />
+      </body>
+    </html>
+  );
+}
