@@ -103,7 +103,7 @@ function fillExpected(
 export function readPoint(
   dataset: DatasetInput,
   model: SeriesModel,
-  point: PointInput,
+  point: Pick<PointInput, 'ligands' | 'modulators'>,
   concentrations: Float64Array,
   displacement: Float64Array,
 ): void {

@@ -1,0 +1,124 @@
+'use client';
+
+import { type ReactNode, useRef, useState } from 'react';
+import { AxisFrame } from '@/components/layout/axis-frame';
+import { RowFrame } from '@/components/layout/row-frame';
+import { ScrollingCell } from '@/components/layout/scrolling-cell';
+import { CollapsePanel } from '@/components/plots/collapse-panel';
+import { type EnergyWindow, fullWindow } from '@/components/plots/energy-window';
+import { energiesOf, type PlotData } from '@/components/plots/plot-data';
+import { useSize } from '@/components/plots/use-size';
+import { WindowRuler } from '@/components/plots/window-ruler';
+import { MathSymbol } from '@/components/ui/math-symbol';
+import { CollapseSwitch } from './collapse-switch';
+import { PointTable } from './point-table';
+import { SeriesRow } from './series-row';
+import { Statements } from './statements';
+import { sentenceOn } from './summary-sentence';
+import { Verdict } from './verdict';
+
+/** How an assessed dataset is being looked at: what the address holds. */
+export interface Look {
+  window: EnergyWindow;
+  byLigand: string | null;
+}
+
+interface AssessedViewProps {
+  data: PlotData;
+  look: Look;
+  onLook: (look: Look) => void;
+  /** above the statements: the dataset's title and what can be done with it */
+  head: ReactNode;
+}
+
+/** An assessed dataset in the three columns: statements, collapse on the axis, verdict; a strip a series below. */
+export function AssessedView({ data, look, onLook, head }: AssessedViewProps) {
+  const column = useRef<HTMLDivElement>(null);
+  const { width } = useSize(column);
+  const [chosen, setChosen] = useState(0);
+  /** the series whose row is pointed at: its points are lit */
+  const [lit, setLit] = useState<number | null>(null);
+  /** the series of the point that is pointed at: its row is lit */
+  const [pointed, setPointed] = useState<number | null>(null);
+  const [lastLigand, setLastLigand] = useState<string | null>(null);
+  const full = fullWindow(energiesOf(data));
+  const setWindow = (window: EnergyWindow) => onLook({ ...look, window });
+  const turn = (byLigand: string | null) => {
+    if (byLigand !== null) setLastLigand(byLigand);
+    onLook({ ...look, byLigand });
+  };
+  return (
+    <>
+      <AxisFrame
+        who={
+          <ScrollingCell label="Dataset and its statements">
+            {head}
+            <Statements data={data} chosen={Math.min(chosen, data.series.length - 1)} onChoose={setChosen} />
+          </ScrollingCell>
+        }
+        axis={
+          <div ref={column} className="flex h-full flex-col">
+            <CollapseSwitch data={data} byLigand={look.byLigand} onChange={turn} />
+            <CollapsePanel
+              data={data}
+              window={look.window}
+              byLigand={look.byLigand}
+              ligand={look.byLigand ?? lastLigand ?? data.document.ligands[0]?.id ?? null}
+              lit={lit}
+              sentence={sentenceOn(data, look)}
+              onPoint={(place) => setPointed(place?.series ?? null)}
+              onChoose={(place) => setChosen(place.series)}
+            />
+            <div className="border-ink border-y lg:hidden">
+              <WindowRuler window={look.window} full={full} onChange={setWindow} />
+            </div>
+          </div>
+        }
+        verdict={
+          <ScrollingCell label="Verdict">
+            <Verdict data={data} window={look.window} full={full} onWindow={setWindow} />
+          </ScrollingCell>
+        }
+      >
+        <RowFrame
+          tone="ruler"
+          className="max-lg:[&>:first-child]:hidden max-lg:[&>:last-child]:hidden"
+          who={<p className="py-1.5 text-sm text-soft">Series as stated</p>}
+          axis={<WindowRuler window={look.window} full={full} onChange={setWindow} />}
+          verdict={<RowHeads />}
+        />
+        <ul>
+          {data.series.map((series, i) => (
+            <SeriesRow
+              key={series.stated.id}
+              series={series}
+              window={look.window}
+              width={width}
+              lit={lit === i || pointed === i}
+              chosen={chosen === i}
+              onLight={(on) => setLit(on ? i : null)}
+              onChoose={() => setChosen(i)}
+            />
+          ))}
+        </ul>
+      </AxisFrame>
+      <div className="page-width">
+        <PointTable data={data} window={look.window} />
+      </div>
+    </>
+  );
+}
+
+function RowHeads() {
+  return (
+    <div className="grid h-full grid-cols-[1fr_1fr_1fr] items-center gap-2 text-sm text-soft">
+      <span>on curve</span>
+      <span className="text-right">
+        RMS <MathSymbol>z</MathSymbol>
+      </span>
+      <span className="text-right">
+        <MathSymbol>p</MathSymbol>
+      </span>
+    </div>
+  );
+}

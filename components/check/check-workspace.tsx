@@ -1,0 +1,130 @@
+'use client';
+
+import { useMutation } from '@tanstack/react-query';
+import { useEffect, useRef, useState } from 'react';
+import { openingWindow } from '@/components/plots/energy-window';
+import { energiesOf, type PlotData } from '@/components/plots/plot-data';
+import { readCsvPoints } from '@/lib/documents/read-csv-points';
+import { assessSource, type SourceOutcome } from './assess-source';
+import { AssessedView, type Look } from './assessed-view';
+import { type CsvDraft, draftFor } from './csv-draft';
+import { DatasetHead } from './dataset-head';
+import { type ExampleSlug, loadExample, loadExampleTable } from './example-words';
+import { kindOf, type Source } from './read-source';
+import { SourceView } from './source-view';
+import { readAddress, useAddress } from './use-address';
+
+const EMPTY: Source = { text: '', name: null };
+
+interface Job {
+  source: Source;
+  draft: CsvDraft | null;
+  example: ExampleSlug | null;
+}
+
+/** The page on which data are checked: first what is to be checked, then what it amounts to. */
+export function CheckWorkspace() {
+  const [source, setSource] = useState<Source>(EMPTY);
+  const [draft, setDraft] = useState<CsvDraft | null>(null);
+  const [example, setExample] = useState<ExampleSlug | null>(null);
+  const [outcome, setOutcome] = useState<SourceOutcome | null>(null);
+  const [editing, setEditing] = useState(true);
+  const [data, setData] = useState<PlotData | null>(null);
+  const [look, setLook] = useState<Look | null>(null);
+  const abort = useRef<AbortController | null>(null);
+
+  const { mutate, isPending } = useMutation({
+    mutationFn: ({ source: given, draft: form }: Job) => {
+      abort.current?.abort();
+      abort.current = new AbortController();
+      return assessSource(given, form, abort.current.signal);
+    },
+    onSuccess: (found, job) => {
+      setOutcome(found);
+      if (found.kind !== 'assessed') return setEditing(true);
+      setData(found.data);
+      setLook(openingLook(found.data, job.example));
+      setEditing(false);
+      window.scrollTo({ top: 0 });
+    },
+  });
+
+  const change = (next: Source) => {
+    setSource(next);
+    setExample(null);
+    setOutcome(null);
+    if (next.text.trim() !== '' && kindOf(next) === 'table')
+      setDraft((earlier) => draftFor(readCsvPoints(next.text), earlier));
+  };
+  const open = async (slug: ExampleSlug) => {
+    const next = { text: await loadExample(slug), name: null };
+    change(next);
+    setExample(slug);
+    mutate({ source: next, draft: null, example: slug });
+  };
+  const openTable = async () => {
+    change({ text: await loadExampleTable(), name: null });
+  };
+
+  useAddress(
+    data && look
+      ? {
+          example,
+          window: editing ? null : changedWindow(data, look),
+          byLigand: editing ? null : look.byLigand,
+        }
+      : null,
+  );
+  // An address with an example opens it, once; React runs effects twice in development.
+  const opened = useRef(false);
+  useEffect(() => {
+    const { example: asked } = readAddress(window.location.search);
+    if (asked === null || opened.current) return;
+    opened.current = true;
+    void open(asked);
+  });
+
+  if (!editing && data && look) {
+    return (
+      <AssessedView
+        data={data}
+        look={look}
+        onLook={setLook}
+        head={<DatasetHead data={data} invented={example !== null} onEdit={() => setEditing(true)} />}
+      />
+    );
+  }
+  return (
+    <SourceView
+      source={source}
+      draft={draft}
+      outcome={outcome}
+      busy={isPending}
+      hasResult={data !== null}
+      onSource={change}
+      onDraft={setDraft}
+      onRefused={(detail) => setOutcome({ kind: 'refused', title: 'This file was not taken', detail })}
+      onAssess={() => mutate({ source, draft, example })}
+      onExample={(slug) => void open(slug)}
+      onTable={() => void openTable()}
+      onResult={() => setEditing(false)}
+    />
+  );
+}
+
+/** An address may ask for a window and a ligand of its example; anything else opens with all of the bend. */
+function openingLook(data: PlotData, example: ExampleSlug | null): Look {
+  const asked = readAddress(window.location.search);
+  const fits = example !== null && asked.example === example;
+  const known = data.document.ligands.some(({ id }) => id === asked.byLigand);
+  return {
+    window: (fits && asked.window) || openingWindow(energiesOf(data)),
+    byLigand: fits && known ? asked.byLigand : null,
+  };
+}
+
+/** The window for the address; null while it is the one that the dataset opens with. */
+function changedWindow(data: PlotData, { window }: Look) {
+  const opening = openingWindow(energiesOf(data));
+  return window.from === opening.from && window.to === opening.to ? null : window;
+}

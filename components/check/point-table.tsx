@@ -1,0 +1,198 @@
+'use client';
+
+import { useState } from 'react';
+import type { EnergyWindow } from '@/components/plots/energy-window';
+import { FlagMark } from '@/components/plots/flag-mark';
+import { concentrationAt, FLAG_WORDS, type PlotData } from '@/components/plots/plot-data';
+import { Button } from '@/components/ui/button';
+import { type DataColumn, DataTable } from '@/components/ui/data-table';
+import { formatCount, formatNumber, formatPValue, formatScore } from '@/components/ui/format-quantity';
+import { MathSymbol } from '@/components/ui/math-symbol';
+import { Quantity } from '@/components/ui/quantity';
+import { SelectField } from '@/components/ui/select-field';
+import { unitLabel } from '@/components/ui/unit-label';
+import type { Flag } from '@/lib/engine/assessment';
+import { type PointTableRow, pointRows } from './point-rows';
+
+const ROWS_A_PAGE = 25;
+
+interface PointTableProps {
+  data: PlotData;
+  window: EnergyWindow;
+}
+
+/** The points of all charts on the page as a table, a page at a time. */
+export function PointTable({ data, window }: PointTableProps) {
+  const [series, setSeries] = useState('all');
+  const [flag, setFlag] = useState('all');
+  const [page, setPage] = useState(0);
+  const rows = pointRows(data, {
+    series: series === 'all' ? null : Number(series),
+    flag: flag === 'all' ? null : (flag as Flag),
+    window,
+  });
+  const pages = Math.max(1, Math.ceil(rows.length / ROWS_A_PAGE));
+  const shown = Math.min(page, pages - 1);
+  const choose = (set: (value: string) => void) => (event: { target: { value: string } }) => {
+    set(event.target.value);
+    setPage(0);
+  };
+  return (
+    <section aria-label="Points as a table" id="points" className="py-8">
+      <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-3">
+        <h2 className="head text-xl">Points</h2>
+        <div className="flex flex-wrap items-end gap-4">
+          <SelectField
+            label="series"
+            className="w-44"
+            value={series}
+            onChange={choose(setSeries)}
+            options={[
+              { value: 'all', label: 'all series' },
+              ...data.series.map(({ label }, i) => ({ value: String(i), label })),
+            ]}
+          />
+          <SelectField
+            label="flag"
+            className="w-32"
+            value={flag}
+            onChange={choose(setFlag)}
+            options={[
+              { value: 'all', label: 'all flags' },
+              ...Object.entries(FLAG_WORDS).map(([value, label]) => ({ value, label })),
+            ]}
+          />
+        </div>
+      </div>
+      {rows.length === 0 ? (
+        <p className="mt-4 text-soft">No point of this series and flag lies in the window of energies.</p>
+      ) : (
+        <>
+          <DataTable
+            className="mt-4"
+            caption={`Points ${shown * ROWS_A_PAGE + 1} to ${Math.min(rows.length, (shown + 1) * ROWS_A_PAGE)} of ${rows.length}`}
+            columns={columnsOf(data)}
+            rows={rows.slice(shown * ROWS_A_PAGE, (shown + 1) * ROWS_A_PAGE)}
+            rowKey={({ key }) => key}
+          />
+          <Pager page={shown} pages={pages} rows={rows.length} onPage={setPage} />
+        </>
+      )}
+    </section>
+  );
+}
+
+interface PagerProps {
+  page: number;
+  pages: number;
+  rows: number;
+  onPage: (page: number) => void;
+}
+
+function Pager({ page, pages, rows, onPage }: PagerProps) {
+  return (
+    <p className="mt-3 flex items-baseline gap-4 text-sm text-soft">
+      <span className="figures">
+        {formatCount(page * ROWS_A_PAGE + 1)}–{formatCount(Math.min(rows, (page + 1) * ROWS_A_PAGE))} of{' '}
+        {formatCount(rows)}
+      </span>
+      {pages > 1 ? (
+        <>
+          <Button disabled={page === 0} onClick={() => onPage(page - 1)}>
+            Previous
+          </Button>
+          <Button disabled={page === pages - 1} onClick={() => onPage(page + 1)}>
+            Next
+          </Button>
+        </>
+      ) : null}
+    </p>
+  );
+}
+
+function columnsOf(data: PlotData): DataColumn<PointTableRow>[] {
+  return [
+    {
+      key: 'series',
+      head: 'series',
+      unit: 'point',
+      cell: ({ series, point }) => (
+        <>
+          {series.label} <span className="figures text-soft">{point.index + 1}</span>
+        </>
+      ),
+    },
+    ...data.document.ligands.map(({ id, name, unit }) => ({
+      key: `ligand ${id}`,
+      head: name,
+      unit: unitLabel(unit),
+      numeric: true,
+      cell: ({ series, point }: PointTableRow) => (
+        <Quantity value={concentrationAt(series, point.index, id)} />
+      ),
+    })),
+    ...(data.document.modulators ?? []).map(({ id, name, unit }) => ({
+      key: `modulator ${id}`,
+      head: name,
+      unit,
+      numeric: true,
+      cell: ({ series, point }: PointTableRow) => {
+        const value = series.stated.points[point.index].modulators?.[id];
+        return value === undefined ? 'reference' : formatNumber(value);
+      },
+    })),
+    {
+      key: 'activity',
+      head: 'activity',
+      unit: '± u',
+      numeric: true,
+      cell: ({ point }) => (
+        <>
+          <Quantity value={point.activity} u={point.activityU} />
+          {point.uncertainty === 'assumed' ? ' assumed' : ''}
+        </>
+      ),
+    },
+    {
+      key: 'energy',
+      head: 'energy',
+      unit: 'kT',
+      numeric: true,
+      cell: ({ point }) => <Quantity value={point.energy} u={point.energyU} />,
+    },
+    {
+      key: 'expected',
+      head: 'expected',
+      unit: '± u',
+      numeric: true,
+      cell: ({ point }) => <Quantity value={point.expected} u={point.expectedU} />,
+    },
+    {
+      key: 'z',
+      head: <MathSymbol>z</MathSymbol>,
+      numeric: true,
+      cell: ({ point }) => (
+        <span className={point.flag === 'off-curve' ? 'font-semibold text-off' : ''}>
+          {formatScore(point.z)}
+        </span>
+      ),
+    },
+    {
+      key: 'p',
+      head: <MathSymbol>p</MathSymbol>,
+      numeric: true,
+      cell: ({ point }) => formatPValue(point.pValue),
+    },
+    { key: 'q', head: <MathSymbol>q</MathSymbol>, numeric: true, cell: ({ point }) => formatPValue(point.q) },
+    {
+      key: 'flag',
+      head: 'flag',
+      cell: ({ point }) => (
+        <span className="inline-flex items-center gap-1.5 whitespace-nowrap">
+          <FlagMark flag={point.flag} />
+          {FLAG_WORDS[point.flag]}
+        </span>
+      ),
+    },
+  ];
+}

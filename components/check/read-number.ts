@@ -1,0 +1,14 @@
+/**
+ * A number as a person types it: surrounding space, a true minus sign and a decimal comma are understood.
+ *
+ * @returns null where the text is no number
+ */
+export function readNumber(text: string): number | null {
+  const plain = text
+    .trim()
+    .replace(/^\u2212/, '-')
+    .replace(',', '.');
+  if (!/^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i.test(plain)) return null;
+  const value = Number(plain);
+  return Number.isFinite(value) ? value : null;
+}

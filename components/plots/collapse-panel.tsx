@@ -1,0 +1,75 @@
+'use client';
+
+import dynamic from 'next/dynamic';
+import { useMemo, useRef, useSyncExternalStore } from 'react';
+import { type CollapseHeights, PANEL_GAP } from './collapse-view';
+import { concentrationAxisOf } from './concentration-axis';
+import type { EnergyWindow } from './energy-window';
+import { PanelWords } from './panel-words';
+import type { PlotData, PointPlace } from './plot-data';
+import { responseCurves } from './response-curves';
+import { useSize } from './use-size';
+
+const CollapseChart = dynamic(() => import('./collapse-chart'), { ssr: false, loading: () => null });
+
+export interface CollapsePanelProps {
+  data: PlotData;
+  window: EnergyWindow;
+  /** the ligand that points stand by; null: by energy */
+  byLigand: string | null;
+  /** the ligand whose responses the curves are, even while they lie on the master curve */
+  ligand: string | null;
+  lit: number | null;
+  sentence: string;
+  onPoint?: (place: PointPlace | null) => void;
+  onChoose?: (place: PointPlace) => void;
+}
+
+/** The residual panel's share of the height, and how tall the two may grow to fill their column. */
+const RESIDUAL_SHARE = 0.29;
+const SHORTEST = 400;
+const TALLEST = 840;
+const STILL = '(prefers-reduced-motion: reduce)';
+
+/** The collapse, the residual panel under it, and the words that stand in them. */
+export function CollapsePanel(props: CollapsePanelProps) {
+  const { data, window, byLigand, ligand, lit, sentence, onPoint, onChoose } = props;
+  const still = useMedia(STILL);
+  const box = useRef<HTMLDivElement>(null);
+  const { height } = useSize(box);
+  const heights = useMemo(() => heightsIn(height), [height]);
+  const axis = useMemo(() => (ligand === null ? null : concentrationAxisOf(data, ligand)), [data, ligand]);
+  const curves = useMemo(() => (axis === null ? [] : responseCurves(data, axis)), [data, axis]);
+  const by = byLigand === null ? ('energy' as const) : ('concentration' as const);
+  return (
+    <div ref={box} className="flex min-h-[400px] grow flex-col lg:min-h-[clamp(30rem,100dvh_-_14rem,52rem)]">
+      {height === 0 ? null : (
+        <CollapseChart
+          view={{ data, window, axis, curves, by, lit, animate: !still, heights }}
+          sentence={sentence}
+          onPoint={onPoint}
+          onChoose={onChoose}
+        >
+          <PanelWords data={data} byLigand={byLigand} />
+        </CollapseChart>
+      )}
+    </div>
+  );
+}
+
+function heightsIn(height: number): CollapseHeights {
+  const whole = Math.max(SHORTEST, Math.min(TALLEST, height)) - PANEL_GAP;
+  const residual = Math.round(whole * RESIDUAL_SHARE);
+  return { plot: whole - residual, residual };
+}
+function useMedia(query: string): boolean {
+  return useSyncExternalStore(
+    (changed) => {
+      const media = matchMedia(query);
+      media.addEventListener('change', changed);
+      return () => media.removeEventListener('change', changed);
+    },
+    () => matchMedia(query).matches,
+    () => false,
+  );
+}

@@ -1,0 +1,139 @@
+'use client';
+
+import { type KeyboardEvent, type PointerEvent, useRef, useState } from 'react';
+import { MINUS } from '@/components/ui/format-quantity';
+import {
+  type EnergyWindow,
+  energyAtPixel,
+  moveWindow,
+  orderedWindow,
+  pixelOf,
+  roundEdge,
+  scaleWindow,
+  ticksOf,
+} from './energy-window';
+import { useSize } from './use-size';
+
+interface WindowRulerProps {
+  window: EnergyWindow;
+  /** all energies: what the window returns to */
+  full: EnergyWindow;
+  onChange: (window: EnergyWindow) => void;
+}
+
+/** A movement shorter than this is a click, pixels. */
+const LEAST_DRAG = 5;
+
+export function signedLabel(energy: number): string {
+  return String(roundEdge(energy)).replace('-', MINUS);
+}
+
+/**
+ * The energy axis as a ruler on which a window is chosen: by dragging along it, or by keys (arrows move the
+ * window, plus and minus narrow and widen it, Home shows all energies).
+ */
+export function WindowRuler({ window, full, onChange }: WindowRulerProps) {
+  const box = useRef<HTMLDivElement>(null);
+  const { width } = useSize(box);
+  const [drag, setDrag] = useState<{ from: number; to: number } | null>(null);
+
+  const pixelIn = (event: PointerEvent) => {
+    const left = box.current?.getBoundingClientRect().left ?? 0;
+    return Math.max(0, Math.min(width, event.clientX - left));
+  };
+  const finish = () => {
+    if (drag && Math.abs(drag.to - drag.from) >= LEAST_DRAG) {
+      const chosen = orderedWindow(
+        energyAtPixel(drag.from, window, width),
+        energyAtPixel(drag.to, window, width),
+      );
+      if (chosen) onChange({ from: roundEdge(chosen.from), to: roundEdge(chosen.to) });
+    }
+    setDrag(null);
+  };
+  const onKeyDown = (event: KeyboardEvent) => {
+    const next = windowAfterKey(event.key, window, full);
+    if (!next) return;
+    event.preventDefault();
+    onChange({ from: roundEdge(next.from), to: roundEdge(next.to) });
+  };
+  return (
+    <div
+      ref={box}
+      role="slider"
+      tabIndex={0}
+      aria-label="Window of energies. Arrow keys move it, plus and minus narrow and widen it, Home shows all energies."
+      aria-valuemin={full.from}
+      aria-valuemax={full.to}
+      aria-valuenow={roundEdge((window.from + window.to) / 2)}
+      aria-valuetext={`${signedLabel(window.from)} to ${signedLabel(window.to)} kT`}
+      className="relative h-8 cursor-col-resize touch-pan-y select-none"
+      onKeyDown={onKeyDown}
+      onPointerDown={(event) => {
+        event.currentTarget.setPointerCapture(event.pointerId);
+        setDrag({ from: pixelIn(event), to: pixelIn(event) });
+      }}
+      onPointerMove={(event) => drag && setDrag({ ...drag, to: pixelIn(event) })}
+      onPointerUp={finish}
+      onPointerCancel={() => setDrag(null)}
+    >
+      <svg width={width} height={32} aria-hidden="true" className="figures block text-xs">
+        {drag ? (
+          <rect
+            x={Math.min(drag.from, drag.to)}
+            width={Math.abs(drag.to - drag.from)}
+            height={32}
+            className="fill-act/25"
+          />
+        ) : null}
+        {width > 0 ? <Ticks window={window} width={width} /> : null}
+        <text x={8} y={22} className="fill-ink font-semibold">
+          kT
+        </text>
+      </svg>
+    </div>
+  );
+}
+
+function Ticks({ window, width }: { window: EnergyWindow; width: number }) {
+  return ticksOf(window, width).map(({ energy, labelled }) => {
+    const x = pixelOf(energy, window, width);
+    const fits = labelled && x > 34 && x < width - 12;
+    return (
+      <g key={energy}>
+        <line x1={x} x2={x} y1={0} y2={labelled ? 7 : 4} className="stroke-field" />
+        {fits ? (
+          <text x={x} y={22} textAnchor="middle" className="fill-soft">
+            {signedLabel(energy)}
+          </text>
+        ) : null}
+      </g>
+    );
+  });
+}
+
+/** The window that a key makes of a window; null where the key has no meaning here. */
+export function windowAfterKey(key: string, window: EnergyWindow, full: EnergyWindow): EnergyWindow | null {
+  switch (key) {
+    case 'ArrowLeft':
+    case 'ArrowDown':
+      return moveWindow(window, -0.1);
+    case 'ArrowRight':
+    case 'ArrowUp':
+      return moveWindow(window, 0.1);
+    case 'PageDown':
+      return moveWindow(window, -0.5);
+    case 'PageUp':
+      return moveWindow(window, 0.5);
+    case '+':
+    case '=':
+      return scaleWindow(window, 0.8);
+    case '-':
+      return scaleWindow(window, 1.25);
+    case 'Home':
+    case 'Escape':
+      return full;
+    default:
+      return null;
+  }
+}
