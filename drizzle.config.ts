@@ -1,0 +1,3 @@
+import { defineConfig } from 'drizzle-kit';
+
+export default defineConfig({ dialect: 'turso', schema: './db/tables/*.ts', out: './drizzle' });

@@ -1,0 +1,22 @@
+/**
+ * `RateLimit-Policy` and `RateLimit` as structured fields (draft-ietf-httpapi-ratelimit-headers-10): one item per
+ * limit; q quota, w window in seconds, qu what is counted, r what is left, t when some of it comes back.
+ */
+import { type Quota, WINDOW_SECONDS } from './computation-limits';
+
+/** The headers that tell a caller its limits. */
+export function limitHeaders(quota: Quota): Record<string, string> {
+  const { limits, calls, points, atOnceLeft } = quota;
+  return {
+    'RateLimit-Policy': [
+      `"calls";q=${limits.callsPerMinute};w=${WINDOW_SECONDS}`,
+      `"points";q=${limits.pointsPerMinute};w=${WINDOW_SECONDS};qu="points"`,
+      `"at-once";q=${limits.atOnce};qu="concurrent-requests"`,
+    ].join(', '),
+    RateLimit: [
+      `"calls";r=${calls.left};t=${calls.resetSeconds}`,
+      `"points";r=${points.left};t=${points.resetSeconds}`,
+      `"at-once";r=${atOnceLeft}`,
+    ].join(', '),
+  };
+}

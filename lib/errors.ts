@@ -1,0 +1,116 @@
+/** The short list of ways in which a call can fail, and what each is in HTTP and in words. */
+import type { Problem } from '@/schemas/problem';
+
+interface ErrorKind {
+  status: number;
+  title: string;
+  meaning: string;
+}
+
+export const ERRORS = {
+  'malformed-json': {
+    status: 400,
+    title: 'The body is not JSON',
+    meaning: 'The body could not be read as JSON; `line` and `column` say where reading stopped.',
+  },
+  'cross-site': {
+    status: 403,
+    title: 'Call from another site',
+    meaning: 'A browser sent this call for a page of another site. Pages of this site and scripts may call.',
+  },
+  forbidden: { status: 403, title: 'Not allowed', meaning: 'You may not do this.' },
+  'not-found': { status: 404, title: 'Not found', meaning: 'There is nothing at this address.' },
+  'method-not-allowed': {
+    status: 405,
+    title: 'Method not allowed',
+    meaning: 'The address exists, but not for this method; the Allow header lists those that it takes.',
+  },
+  'incomplete-body': {
+    status: 400,
+    title: 'The body did not arrive whole',
+    meaning: 'The connection ended before the whole body had arrived.',
+  },
+  'body-too-large': {
+    status: 413,
+    title: 'The body is too large',
+    meaning: 'A document may have at most 8 MiB (8,388,608 bytes).',
+  },
+  'not-json-type': {
+    status: 415,
+    title: 'The body must be application/json',
+    meaning: 'Send the document with the header Content-Type: application/json, uncompressed.',
+  },
+  'invalid-document': {
+    status: 422,
+    title: 'The document is not valid',
+    meaning: '`errors` lists everything that is wrong, each with its place and what would be right.',
+  },
+  'too-many-calls': {
+    status: 429,
+    title: 'Too many calls',
+    meaning: 'This address used up its calls for the minute; Retry-After says when there are more.',
+  },
+  'too-many-points': {
+    status: 429,
+    title: 'Too many points',
+    meaning: 'This address used up its points for the minute; Retry-After says when there are enough.',
+  },
+  'too-many-at-once': {
+    status: 429,
+    title: 'Too many at once',
+    meaning: 'Other calls of this address are still being computed; wait for their answers.',
+  },
+  unexpected: {
+    status: 500,
+    title: 'Something went wrong here',
+    meaning: 'The fault is on our side and has been noted in the log.',
+  },
+  busy: {
+    status: 503,
+    title: 'Busy',
+    meaning: 'More is waiting to be computed than can be held; Retry-After says when to try again.',
+  },
+  'took-too-long': {
+    status: 503,
+    title: 'The computation took too long',
+    meaning: 'The computation was stopped after 30 seconds.',
+  },
+  unavailable: {
+    status: 503,
+    title: 'Not available at the moment',
+    meaning: 'A part that this call needs does not answer; /api/v1/health says which.',
+  },
+} as const satisfies Record<string, ErrorKind>;
+
+export type ErrorCode = keyof typeof ERRORS;
+
+export interface Failure {
+  code: ErrorCode;
+  /** what would be right here; the general meaning where left out */
+  detail?: string;
+  members?: Pick<Problem, 'line' | 'column' | 'errors'>;
+}
+
+/** Whether a text is one of the codes. */
+export function isErrorCode(text: string): text is ErrorCode {
+  return Object.hasOwn(ERRORS, text);
+}
+
+/** The failure as problem details. */
+export function problemOf({ code, detail, members }: Failure): Problem {
+  const { status, title, meaning } = ERRORS[code];
+  return { type: `/api/v1/problems/${code}`, title, status, detail: detail ?? meaning, ...members };
+}
+
+/** The failure as an HTTP answer: the one place where a code becomes a status. */
+export function problemResponse(failure: Failure, headers: Record<string, string> = {}): Response {
+  const problem = problemOf(failure);
+  return new Response(JSON.stringify(problem), {
+    status: problem.status,
+    headers: {
+      'Content-Type': 'application/problem+json',
+      'Cache-Control': 'no-store',
+      ...headers,
+    },
+  });
+}

@@ -1,0 +1,47 @@
+/** What all route handlers of the API share: errors that nobody expected, methods that are not there, reads with an ETag. */
+import { createHash } from 'node:crypto';
+import { problemResponse } from '@/lib/errors';
+import { log } from '@/lib/log';
+
+type Handler = (request: Request) => Promise<Response> | Response;
+
+/** The handler, with what it throws logged and answered as a problem that gives nothing away. */
+export function answering(handler: Handler): Handler {
+  return async (request) => {
+    try {
+      return await handler(request);
+    } catch (error) {
+      log().error(
+        { err: error, method: request.method, path: new URL(request.url).pathname },
+        'a call failed',
+      );
+      return problemResponse({ code: 'unexpected' });
+    }
+  };
+}
+
+/** A handler for the methods that an address does not take: 405 with those that it does. */
+export function methodNotAllowed(...allowed: string[]): Handler {
+  return () => problemResponse({ code: 'method-not-allowed' }, { Allow: [...allowed, 'OPTIONS'].join(', ') });
+}
+
+/** A handler for OPTIONS: which methods an address takes. No other site's pages are let in, so no CORS headers. */
+export function optionsOf(...allowed: string[]): Handler {
+  return () => new Response(null, { status: 204, headers: { Allow: [...allowed, 'OPTIONS'].join(', ') } });
+}
+
+/** A text that only changes with the version: strong ETag, and 304 where the caller has it already. */
+export function unchangingResponse(request: Request, text: string, contentType: string): Response {
+  const etag = `"${createHash('sha256').update(text).digest('base64url').slice(0, 27)}"`;
+  // no-transform: compressed on the way it would be other bytes under the same strong ETag.
+  const headers = { ETag: etag, 'Cache-Control': 'public, no-cache, no-transform' };
+  if (matches(request.headers.get('if-none-match'), etag))
+    return new Response(null, { status: 304, headers });
+  return new Response(text, { headers: { ...headers, 'Content-Type': contentType } });
+}
+
+/** If-None-Match compares weakly (RFC 9110, 13.1.2). */
+function matches(header: string | null, etag: string): boolean {
+  if (header === null) return false;
+  return header.split(',').some((part) => ['*', etag].includes(part.trim().replace(/^W\//, '')));
+}

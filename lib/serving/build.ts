@@ -1,0 +1,4 @@
+/** The command `npm run build`. */
+import { buildAll } from './build-all';
+
+await buildAll();

@@ -1,0 +1,61 @@
+/** The headers that every answer carries, whatever it is. */
+
+/** For whatever is not a page: nothing in it may load, run or be framed. */
+export const CLOSED_POLICY =
+  "default-src 'none'; base-uri 'none'; form-action 'none'; frame-ancestors 'none'";
+
+/** Features of browsers that no page of this site uses. */
+const PERMISSIONS_POLICY = [
+  'accelerometer',
+  'camera',
+  'display-capture',
+  'geolocation',
+  'gyroscope',
+  'magnetometer',
+  'microphone',
+  'midi',
+  'payment',
+  'usb',
+]
+  .map((feature) => `${feature}=()`)
+  .join(', ');
+
+/**
+ * Headers of every answer. The content policy is the closed one; `proxy.ts` puts the policy of a page in its place.
+ *
+ * @param appUrl origin of the site; over https browsers are told to keep to https
+ */
+export function securityHeaders(appUrl: string): Record<string, string> {
+  return {
+    'Content-Security-Policy': CLOSED_POLICY,
+    'X-Content-Type-Options': 'nosniff',
+    'Referrer-Policy': 'strict-origin-when-cross-origin',
+    'Permissions-Policy': PERMISSIONS_POLICY,
+    'Cross-Origin-Opener-Policy': 'same-origin',
+    'Cross-Origin-Resource-Policy': 'same-origin',
+    'X-Frame-Options': 'DENY',
+    ...(appUrl.startsWith('https:')
+      ? { 'Strict-Transport-Security': 'max-age=63072000; includeSubDomains' }
+      : {}),
+  };
+}
+
+/**
+ * The content policy of a page.
+ *
+ * @param nonce new for every request, base64
+ * @param development `next dev` compiles in the browser and reloads through a web socket; only there are both let in
+ */
+export function pagePolicy(nonce: string, development: boolean): string {
+  return [
+    "default-src 'none'",
+    `script-src 'nonce-${nonce}' 'strict-dynamic'${development ? " 'unsafe-eval'" : ''}`,
+    `style-src 'self' 'nonce-${nonce}'`,
+    "img-src 'self' blob: data:",
+    "font-src 'self'",
+    `connect-src 'self'${development ? ' ws:' : ''}`,
+    "base-uri 'none'",
+    "form-action 'self'",
+    "frame-ancestors 'none'",
+  ].join('; ');
+}

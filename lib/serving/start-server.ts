@@ -1,0 +1,110 @@
+/**
+ * The server: Node's own HTTP server in front of Next, since only the socket knows who is calling. It knows nothing
+ * of the application but its database and its worker threads, which it opens and closes.
+ */
+import { createServer, type IncomingMessage, type Server, type ServerResponse } from 'node:http';
+import type { AddressInfo } from 'node:net';
+import { applyMigrations } from '@/db/apply-migrations';
+import { closeDatabase } from '@/db/client';
+import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
+import { checkEnvOrExit, type Env } from '@/lib/env';
+import { log } from '@/lib/log';
+import { lingerBeforeEnd } from './linger';
+import { logRequest } from './log-request';
+import { PEER_HEADER, peerAddress } from './peer';
+import { MOST_BODY_BYTES } from './read-body';
+import { refuseBrokenRequest, refuseUnreadablePath } from './refuse-broken-request';
+import { securityHeaders } from './security-headers';
+import { stopOnSignal } from './stop-on-signal';
+
+type NextHandler = (request: IncomingMessage, response: ServerResponse) => Promise<void>;
+
+/** Milliseconds: for the headers of a request, for the whole of it, and for an idle connection. */
+const HEADERS_TIMEOUT_MS = 15_000;
+const REQUEST_TIMEOUT_MS = 60_000;
+const IDLE_TIMEOUT_MS = 10_000;
+
+/** Starts serving and resolves once calls are taken. Ends the process with a sentence where it cannot. */
+export async function startServer({ development }: { development: boolean }): Promise<void> {
+  // Before Next is loaded, which decides by it which build of React it takes.
+  Object.assign(process.env, {
+    NODE_ENV: development ? 'development' : 'production',
+    NEXT_TELEMETRY_DISABLED: '1',
+  });
+  const env = checkEnvOrExit();
+  const server = createServer();
+  const [handle] = await Promise.all([prepareNext(server, env, development), applyMigrations()]);
+  answerWith(server, handle, env);
+  await listen(server, env);
+  stopOnSignal(server, async () => {
+    await closeAssessmentPool();
+    await closeDatabase();
+  });
+  announce(server, env);
+}
+
+async function prepareNext(server: Server, env: Env, development: boolean): Promise<NextHandler> {
+  const { default: next } = await import('next');
+  const app = next({
+    dev: development,
+    dir: process.cwd(),
+    hostname: env.host,
+    port: env.port,
+    httpServer: server,
+  });
+  await app.prepare();
+  return app.getRequestHandler();
+}
+
+function answerWith(server: Server, handle: NextHandler, env: Env): void {
+  const headers = securityHeaders(env.appUrl);
+  const answer = (request: IncomingMessage, response: ServerResponse) => {
+    const forwardedFor = request.headers['x-forwarded-for'];
+    const claimed = Array.isArray(forwardedFor) ? forwardedFor.join(',') : forwardedFor;
+    request.headers[PEER_HEADER] = peerAddress(request.socket.remoteAddress, claimed, env.trustedProxies);
+    for (const [name, value] of Object.entries(headers)) response.setHeader(name, value);
+    logRequest(request, response);
+    if (refuseUnreadablePath(request, response)) return;
+    handle(request, response).catch((error: unknown) => {
+      log().error({ err: error }, 'a request failed');
+      response.destroy();
+    });
+  };
+  server.headersTimeout = HEADERS_TIMEOUT_MS;
+  server.requestTimeout = REQUEST_TIMEOUT_MS;
+  server.keepAliveTimeout = IDLE_TIMEOUT_MS;
+  server.on('request', (request: IncomingMessage, response: ServerResponse) => {
+    lingerBeforeEnd(request, response);
+    answer(request, response);
+  });
+  server.on('checkContinue', (request: IncomingMessage, response: ServerResponse) => {
+    // A caller that asks before it sends is not told to send what would be refused; nothing of it is on its way then.
+    if (Number(request.headers['content-length'] ?? 0) <= MOST_BODY_BYTES) {
+      response.writeContinue();
+      lingerBeforeEnd(request, response);
+    }
+    answer(request, response);
+  });
+  server.on('clientError', (error, socket) => refuseBrokenRequest(error, socket, headers));
+}
+
+function listen(server: Server, { host, port }: Env): Promise<void> {
+  return new Promise((resolve) => {
+    server.once('error', (error: NodeJS.ErrnoException) => {
+      const reason =
+        error.code === 'EADDRINUSE'
+          ? 'is taken; set PORT to another number'
+          : `cannot be used (${error.code})`;
+      process.stderr.write(`Port ${port} on ${host} ${reason}.\n`);
+      process.exit(1);
+    });
+    server.listen(port, host, resolve);
+  });
+}
+
+function announce(server: Server, { host, demo }: Env): void {
+  const { port } = server.address() as AddressInfo;
+  const url = `http://${host.includes(':') ? `[${host}]` : host}:${port}`;
+  log().info({ url }, 'listening');
+  if (demo) process.stdout.write(`\nCurvekeep is ready: ${url}\nStop it with Ctrl+C.\n\n`);
+}

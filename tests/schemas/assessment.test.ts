@@ -1,0 +1,19 @@
+import { expect, expectTypeOf, it } from 'vitest';
+import type { z } from 'zod';
+import { parseDocument } from '@/lib/documents/parse-document';
+import { assess } from '@/lib/engine/assess';
+import type { Assessment } from '@/lib/engine/assessment';
+import { assessmentSchema } from '@/schemas/assessment';
+import { exampleDocument } from '@/tests/support/example-document';
+
+it('the schema of the assessment and the type of the engine are the same', () => {
+  expectTypeOf<z.infer<typeof assessmentSchema>>().toEqualTypeOf<Assessment>();
+  expectTypeOf<Assessment>().toEqualTypeOf<z.infer<typeof assessmentSchema>>();
+});
+
+it('what the engine computes fits the schema', () => {
+  const parsed = parseDocument(JSON.stringify(exampleDocument({ series: 3, pointsPerSeries: 8 })));
+  if (!parsed.ok) throw new Error(JSON.stringify(parsed));
+  const assessment: unknown = JSON.parse(JSON.stringify(assess(parsed.document)));
+  expect(assessmentSchema.parse(assessment)).toEqual(assessment);
+});
