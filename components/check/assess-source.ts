@@ -41,7 +41,11 @@ export async function assessSource(
 async function assessText(text: string, signal: AbortSignal): Promise<SourceOutcome> {
   const answer = await ask(text, signal);
   if ('kind' in answer) return answer;
-  if (answer.ok) return { kind: 'assessed', data: plotDataOf(JSON.parse(text), answer.assessment) };
+  if (answer.ok) {
+    // The server passes over a byte order mark; JSON.parse does not.
+    const document: DatasetDocument = JSON.parse(text.replace(/^\uFEFF/, ''));
+    return { kind: 'assessed', data: plotDataOf(document, answer.assessment) };
+  }
   return outcomeOf(answer.problem, (pointers) => locatePointers(text, pointers));
 }
 

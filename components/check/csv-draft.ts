@@ -1,12 +1,13 @@
 /** The form beside a table of points, as it is typed: every number is text until it is read. */
 import type { CsvPoints } from '@/lib/documents/read-csv-points';
-import type {
-  ConcentrationUnit,
-  EnergyOrientation,
-  EnergyUnit,
-  GapUnit,
-  RatioOrientation,
-  TemperatureUnit,
+import {
+  type ConcentrationUnit,
+  concentrationKind,
+  type EnergyOrientation,
+  type EnergyUnit,
+  type GapUnit,
+  type RatioOrientation,
+  type TemperatureUnit,
 } from '@/lib/engine/units';
 import type { CsvParametersInput } from '@/schemas/csv-parameters';
 import { readNumber } from './read-number';
@@ -76,7 +77,6 @@ function emptyParameters(): ParametersDraft {
 }
 
 function withColumns(parameters: ParametersDraft, { ligands, modulators }: CsvPoints): ParametersDraft {
-  const constant = (unit: ConcentrationUnit): ConstantDraft => ({ value: '', u: '', unit, binds: true });
   const slope = {
     value: '',
     u: '',
@@ -87,13 +87,19 @@ function withColumns(parameters: ParametersDraft, { ligands, modulators }: CsvPo
   return {
     ...parameters,
     binding: Object.fromEntries(
-      ligands.map(({ id, unit }) => [
-        id,
-        parameters.binding[id] ?? { inactive: constant(unit), active: constant(unit) },
-      ]),
+      ligands.map(({ id, unit }) => {
+        const { inactive, active } = parameters.binding[id] ?? {};
+        return [id, { inactive: fitted(unit, inactive), active: fitted(unit, active) }];
+      }),
     ),
     modulation: Object.fromEntries(modulators.map(({ id }) => [id, parameters.modulation[id] ?? slope])),
   };
+}
+
+/** A constant in a unit of its ligand's kind, which may have changed with the table's heading. */
+function fitted(unit: ConcentrationUnit, earlier?: ConstantDraft): ConstantDraft {
+  if (earlier === undefined) return { value: '', u: '', unit, binds: true };
+  return concentrationKind(earlier.unit) === concentrationKind(unit) ? earlier : { ...earlier, unit };
 }
 
 /** The form as the schema takes it. Text that is no number becomes NaN, which the schema refuses by name. */

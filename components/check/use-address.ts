@@ -4,6 +4,7 @@ import { useEffect } from 'react';
 import type { EnergyWindow } from '@/components/plots/energy-window';
 import { orderedWindow } from '@/components/plots/energy-window';
 import { type ExampleSlug, isExampleSlug } from './example-words';
+import { readNumber } from './read-number';
 
 /** What an address can say of this page: which example, seen how. Data that somebody pasted are in no address. */
 export interface CheckAddress {
@@ -19,10 +20,14 @@ export function readAddress(search: string): CheckAddress {
     example: isExampleSlug(example) ? example : null,
     window:
       query.has('from') && query.has('to')
-        ? orderedWindow(Number(query.get('from')), Number(query.get('to')))
+        ? orderedWindow(numberIn(query, 'from'), numberIn(query, 'to'))
         : null,
     byLigand: query.get('by'),
   };
+}
+
+function numberIn(query: URLSearchParams, name: string): number {
+  return readNumber(query.get(name) ?? '') ?? Number.NaN;
 }
 
 export function writeAddress({ example, window, byLigand }: CheckAddress): string {

@@ -34,7 +34,8 @@ export function fullWindow(energies: Iterable<number>): EnergyWindow {
 export function orderedWindow(a: number, b: number): EnergyWindow | null {
   if (!Number.isFinite(a) || !Number.isFinite(b)) return null;
   const window = { from: Math.min(a, b), to: Math.max(a, b) };
-  return window.to - window.from >= NARROWEST_WINDOW ? window : null;
+  // 0.3 − 0.1 is a trifle less than 0.2 in floating point.
+  return window.to - window.from >= NARROWEST_WINDOW - 1e-9 ? window : null;
 }
 
 export function isInside(energy: number, window: EnergyWindow): boolean {
@@ -77,7 +78,9 @@ export interface Tick {
 export function ticksOf(window: EnergyWindow, width: number): Tick[] {
   const span = window.to - window.from;
   const most = Math.max(2, width / 90);
-  const step = [0.02, 0.1, 0.2, 1, 2, 4, 10, 20, 100, 200].find((size) => span / size <= most) ?? 1000;
+  const fitting = [0.02, 0.1, 0.2, 1, 2, 4, 10, 20, 100, 200].find((size) => span / size <= most);
+  // An address may ask for a window of any width: its ticks stay few.
+  const step = fitting ?? 10 ** Math.ceil(Math.log10(span / most));
   const ticks: Tick[] = [];
   const half = step / 2;
   for (let k = Math.ceil(window.from / half); k * half <= window.to; k++) {

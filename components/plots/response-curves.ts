@@ -37,17 +37,26 @@ function conditionsOf(series: PlotSeries, ligand: string): Condition[] {
     const ligands = { ...point.ligands };
     delete ligands[ligand];
     const condition = { ligands, modulators: point.modulators };
-    const key = JSON.stringify([sortedEntries(ligands), sortedEntries(point.modulators ?? {})]);
+    const key = JSON.stringify([nonZeroEntries(ligands), modulatorEntries(series, point)]);
     if (!found.has(key)) found.set(key, condition);
     if (found.size === MOST_CURVES_PER_SERIES) break;
   }
   return [...found.values()];
 }
 
-function sortedEntries(values: Record<string, number>): [string, number][] {
+/** A ligand that is left out is 0. */
+function nonZeroEntries(values: Record<string, number>): [string, number][] {
   return Object.entries(values)
     .filter(([, value]) => value !== 0)
     .sort(([a], [b]) => (a < b ? -1 : 1));
+}
+
+/** A modulator that is left out stands at its reference. */
+function modulatorEntries({ stated }: PlotSeries, { modulators }: Point): [string, number][] {
+  return (stated.parameters.modulation ?? []).map(({ modulator, reference }) => [
+    modulator,
+    modulators?.[modulator] ?? reference,
+  ]);
 }
 
 function sampleCurve(

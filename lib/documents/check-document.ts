@@ -1,5 +1,5 @@
 import type { DatasetDocument } from '@/schemas/dataset-1.generated';
-import { judgeMeaning } from './check-meaning';
+import { checkMeaning } from './check-meaning';
 import { collectSchemaErrors, fitsSchema, tooManyPoints } from './check-schema';
 import type { DocumentError } from './document-error';
 import { type ErrorList, listErrors, MOST_ERRORS } from './error-list';
@@ -25,7 +25,7 @@ export function checkDocument(value: unknown): CheckedDocument {
 
 function judgeFitting(document: DatasetDocument): ErrorList {
   const errors = listErrors();
-  judgeMeaning(document, (pointer, detail) => errors.add(pointer, () => detail));
+  checkMeaning(document, (pointer, detail) => errors.add(pointer, () => detail));
   return errors;
 }
 
@@ -44,7 +44,7 @@ function judgeBroken(value: unknown): ErrorList {
     broken.filter(({ detail }) => !detail.startsWith('unknown property')).map(({ pointer }) => pointer),
   );
   if (rest === null) return errors;
-  judgeMeaning(rest, (pointer, detail) => {
+  checkMeaning(rest, (pointer, detail) => {
     if (!broken.some((error) => concernsSame(error.pointer, pointer))) errors.add(pointer, () => detail);
   });
   return errors;

@@ -9,9 +9,7 @@ import { checkSharedStatements } from './check-shared-statements';
 import { checkSize } from './check-size';
 import { checkTemperatures } from './check-temperatures';
 import { checkUnits } from './check-units';
-import type { DocumentError } from './document-error';
 import type { MeaningCheck, Report } from './document-report';
-import { listErrors } from './error-list';
 
 const CHECKS: MeaningCheck[] = [
   checkSize,
@@ -29,15 +27,8 @@ const CHECKS: MeaningCheck[] = [
 /**
  * What is wrong with the meaning of a document that fits the schema: ids, references, kinds of units,
  * ranges after conversion, correlations, shared quantities, check characters. All of it, never only the
- * first; the list is cut where it grows long, and then its last entry says how many more there are.
+ * first, told error by error.
  */
-export function checkMeaning(document: DatasetDocument): DocumentError[] {
-  const errors = listErrors();
-  judgeMeaning(document, (pointer, detail) => errors.add(pointer, () => detail));
-  return errors.toArray();
-}
-
-/** As `checkMeaning`, told error by error. */
-export function judgeMeaning(document: DatasetDocument, report: Report): void {
+export function checkMeaning(document: DatasetDocument, report: Report): void {
   for (const check of CHECKS) check(document, report);
 }

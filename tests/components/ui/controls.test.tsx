@@ -3,7 +3,6 @@ import { expect, it } from 'vitest';
 import { DataTable } from '@/components/ui/data-table';
 import { Notice } from '@/components/ui/notice';
 import { NumberField } from '@/components/ui/number-field';
-import { Progress } from '@/components/ui/progress';
 import { Quantity } from '@/components/ui/quantity';
 import { unitLabel } from '@/components/ui/unit-label';
 
@@ -44,14 +43,6 @@ it('speaks an error that follows an action at once, a note when there is time', 
   expect(renderToStaticMarkup(<Notice kind="error" title="No" live />)).toContain('role="alert"');
   expect(renderToStaticMarkup(<Notice kind="note" title="So" live />)).toContain('role="status"');
   expect(renderToStaticMarkup(<Notice kind="note" title="So" />)).not.toContain('role=');
-});
-
-it('says how much of long work is done and how long it will take', () => {
-  const html = renderToStaticMarkup(
-    <Progress label="Assessing" done={1200} total={20000} secondsLeft={12} />,
-  );
-  expect(html).toContain('1,200 of 20,000, about 10 s left');
-  expect(html).not.toContain('style=');
 });
 
 it('writes a quantity with a raised exponent', () => {
