@@ -78,10 +78,11 @@ export function CheckWorkspace() {
   // An address with an example opens it, once; React runs effects twice in development.
   const opened = useRef(false);
   useEffect(() => {
-    const { example: asked } = readAddress(window.location.search);
-    if (asked === null || opened.current) return;
+    // Later it is this page itself that writes an example into the address.
+    if (opened.current) return;
     opened.current = true;
-    void open(asked);
+    const { example: asked } = readAddress(window.location.search);
+    if (asked !== null) void open(asked);
   });
 
   if (!editing && data && look) {
