@@ -8,17 +8,21 @@ import { checkReferences } from './check-references';
 import { checkSharedStatements } from './check-shared-statements';
 import { checkSize } from './check-size';
 import { checkTemperatures } from './check-temperatures';
+import { checkUncertainties } from './check-uncertainties';
 import { checkUnits } from './check-units';
+import { checkWork } from './check-work';
 import type { MeaningCheck, Report } from './document-report';
 
 const CHECKS: MeaningCheck[] = [
   checkSize,
+  checkWork,
   checkOrcids,
   checkIdentities,
   checkReferences,
   checkTemperatures,
   checkUnits,
   checkGaps,
+  checkUncertainties,
   checkPoints,
   checkSharedStatements,
   checkCorrelations,

@@ -105,7 +105,7 @@ function addTemperature(
   ofSeries?: TemperatureStatement,
 ): void {
   const statement = ofSeries ?? ofDataset;
-  const key = ofSeries ? labelOf(ofSeries) : 'temperature of the dataset';
+  const key = labelOf(statement) ?? (ofSeries ? null : 'temperature of the dataset');
   collector.add('temperature', 0, 0, statement.u ?? 0, key);
 }
 

@@ -34,9 +34,15 @@ const gap = (range: number): fc.Arbitrary<GapStatement> =>
     }),
   );
 
+/** Mostly what laboratories state, now and then the largest that a document may hold. */
+const relativeU = fc.oneof(
+  { weight: 12, arbitrary: real(0, 0.5) },
+  { weight: 1, arbitrary: fc.constant(100) },
+);
+
 /** A constant between 1e-15 M and 1e3 M, stated in any unit. */
 const constant: fc.Arbitrary<ConstantStatement> = fc
-  .record({ molar: logReal(-14, 2), unit: fc.constantFrom(...UNITS), relative: real(0, 0.5) })
+  .record({ molar: logReal(-14, 2), unit: fc.constantFrom(...UNITS), relative: relativeU })
   .map(({ molar, unit, relative }) => {
     const value = convertConcentration(molar, 'M', unit) ?? molar;
     return { value, unit, u: relative * value };
