@@ -15,7 +15,7 @@ import { HomeRow } from './home-row';
 export default function HomePage() {
   const { document, assessment } = assessedExample();
   const { summary, series } = assessment;
-  const window = openingWindow(series.flatMap(({ points }) => points.map(({ energy }) => energy)));
+  const window = openingWindow(series.flatMap(({ points }) => points));
   return (
     <AxisFrame
       who={

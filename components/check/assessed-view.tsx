@@ -83,7 +83,7 @@ export function AssessedView({ data, look, onLook, head }: AssessedViewProps) {
         <RowFrame
           tone="ruler"
           className="max-lg:[&>:first-child]:hidden max-lg:[&>:last-child]:hidden"
-          who={<p className="py-1.5 text-sm text-soft">Series as stated</p>}
+          who={<p className="py-1.5 text-sm text-soft">Series</p>}
           axis={<WindowRuler window={look.window} full={full} onChange={setWindow} />}
           verdict={<RowHeads />}
         />
@@ -111,8 +111,8 @@ export function AssessedView({ data, look, onLook, head }: AssessedViewProps) {
 
 function RowHeads() {
   return (
-    <div className="grid h-full grid-cols-[1fr_1fr_1fr] items-center gap-2 text-sm text-soft">
-      <span>on curve</span>
+    <div className="grid h-full grid-cols-[auto_1fr_1fr] items-center gap-2 text-sm text-soft">
+      <span className="min-w-14 whitespace-nowrap">on curve</span>
       <span className="text-right">
         RMS <MathSymbol>z</MathSymbol>
       </span>

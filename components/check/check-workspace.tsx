@@ -3,13 +3,14 @@
 import { useMutation } from '@tanstack/react-query';
 import { useEffect, useRef, useState } from 'react';
 import { openingWindow } from '@/components/plots/energy-window';
-import { energiesOf, type PlotData } from '@/components/plots/plot-data';
+import { type PlotData, pointsOf } from '@/components/plots/plot-data';
 import { readCsvPoints } from '@/lib/documents/read-csv-points';
 import { assessSource, type SourceOutcome } from './assess-source';
 import { AssessedView, type Look } from './assessed-view';
 import { type CsvDraft, draftFor } from './csv-draft';
 import { DatasetHead } from './dataset-head';
 import { type ExampleSlug, loadExample, loadExampleTable } from './example-words';
+import { keepSource, keptSource } from './kept-source';
 import { kindOf, type Source } from './read-source';
 import { SourceView } from './source-view';
 import { readAddress, useAddress } from './use-address';
@@ -63,29 +64,36 @@ export function CheckWorkspace() {
     mutate({ source: next, draft: null, example: slug });
   };
   const openTable = async () => {
-    change({ text: await loadExampleTable(), name: null });
+    const table = await loadExampleTable();
+    setSource({ text: table.text, name: null });
+    setDraft(table.draft);
+    setExample(null);
+    setOutcome(null);
   };
 
+  const showsResult = !editing && data !== null && look !== null;
   useAddress(
-    data && look
-      ? {
-          example,
-          window: editing ? null : changedWindow(data, look),
-          byLigand: editing ? null : look.byLigand,
-        }
-      : null,
+    showsResult ? { example, window: changedWindow(data, look), byLigand: look.byLigand } : null,
+    (toResult) => setEditing(!toResult),
   );
-  // An address with an example opens it, once; React runs effects twice in development.
+  // An address with an example opens it, once; else what was being checked in this tab is there again.
   const opened = useRef(false);
   useEffect(() => {
-    // Later it is this page itself that writes an example into the address.
     if (opened.current) return;
     opened.current = true;
     const { example: asked } = readAddress(window.location.search);
+    const kept = keptSource();
     if (asked !== null) void open(asked);
+    else if (kept !== null) {
+      setSource(kept.source);
+      setDraft(kept.draft);
+    }
   });
+  useEffect(() => {
+    if (source !== EMPTY) keepSource({ source, draft });
+  }, [source, draft]);
 
-  if (!editing && data && look) {
+  if (showsResult) {
     return (
       <AssessedView
         data={data}
@@ -119,13 +127,13 @@ function openingLook(data: PlotData, example: ExampleSlug | null): Look {
   const fits = example !== null && asked.example === example;
   const known = data.document.ligands.some(({ id }) => id === asked.byLigand);
   return {
-    window: (fits && asked.window) || openingWindow(energiesOf(data)),
+    window: (fits && asked.window) || openingWindow(pointsOf(data)),
     byLigand: fits && known ? asked.byLigand : null,
   };
 }
 
 /** The window for the address; null while it is the one that the dataset opens with. */
 function changedWindow(data: PlotData, { window }: Look) {
-  const opening = openingWindow(energiesOf(data));
+  const opening = openingWindow(pointsOf(data));
   return window.from === opening.from && window.to === opening.to ? null : window;
 }

@@ -15,7 +15,7 @@ export function CollapseSwitch({ data, byLigand, onChange }: CollapseSwitchProps
   ];
   return (
     <fieldset className="flex flex-wrap gap-x-5 border-hairline border-b px-2">
-      <legend className="sr-only">What the points stand by</legend>
+      <legend className="sr-only">Points ordered</legend>
       {options.map(({ id, label }) => (
         <label
           key={id ?? ''}

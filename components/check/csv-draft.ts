@@ -86,13 +86,20 @@ function withColumns(parameters: ParametersDraft, { ligands, modulators }: CsvPo
   };
   return {
     ...parameters,
-    binding: Object.fromEntries(
-      ligands.map(({ id, unit }) => {
-        const { inactive, active } = parameters.binding[id] ?? {};
-        return [id, { inactive: fitted(unit, inactive), active: fitted(unit, active) }];
-      }),
-    ),
-    modulation: Object.fromEntries(modulators.map(({ id }) => [id, parameters.modulation[id] ?? slope])),
+    // What was typed for a column whose heading is being retyped is kept.
+    binding: {
+      ...parameters.binding,
+      ...Object.fromEntries(
+        ligands.map(({ id, unit }) => {
+          const { inactive, active } = parameters.binding[id] ?? {};
+          return [id, { inactive: fitted(unit, inactive), active: fitted(unit, active) }];
+        }),
+      ),
+    },
+    modulation: {
+      ...parameters.modulation,
+      ...Object.fromEntries(modulators.map(({ id }) => [id, parameters.modulation[id] ?? slope])),
+    },
   };
 }
 
@@ -121,12 +128,17 @@ export function formOf(draft: CsvDraft, table: CsvPoints, title: string): CsvPar
     ligands: Object.fromEntries(
       table.ligands.map(({ id }) => [id, { concentration: draft.totals.includes(id) ? 'total' : 'free' }]),
     ),
-    parameters: statedOf(draft.parameters),
-    series: Object.fromEntries(own.map(([id, parameters]) => [id, { parameters: statedOf(parameters) }])),
+    parameters: statedOf(draft.parameters, table),
+    series: Object.fromEntries(
+      own.map(([id, parameters]) => [id, { parameters: statedOf(parameters, table) }]),
+    ),
   };
 }
 
-function statedOf(draft: ParametersDraft): CsvParametersInput['parameters'] {
+function statedOf(
+  draft: ParametersDraft,
+  { ligands, modulators }: CsvPoints,
+): CsvParametersInput['parameters'] {
   const gap = {
     value: number(draft.gap.value),
     u: optional(draft.gap.u),
@@ -141,16 +153,17 @@ function statedOf(draft: ParametersDraft): CsvParametersInput['parameters'] {
     gapScope: draft.gapScope,
     sites: { value: number(draft.sites.value), u: optional(draft.sites.u) },
     binding: Object.fromEntries(
-      Object.entries(draft.binding).map(([id, { inactive, active }]) => [
+      ligands.map(({ id }) => [
         id,
-        { inactive: constantOf(inactive), active: constantOf(active) },
+        { inactive: constantOf(draft.binding[id].inactive), active: constantOf(draft.binding[id].active) },
       ]),
     ),
     modulation: Object.fromEntries(
-      Object.entries(draft.modulation).map(([id, { value, u, unit, orientation, reference }]) => [
-        id,
-        { slope: { value: number(value), u: optional(u), unit, orientation }, reference: number(reference) },
-      ]),
+      modulators.map(({ id }) => {
+        const { value, u, unit, orientation, reference } = draft.modulation[id];
+        const slope = { value: number(value), u: optional(u), unit, orientation };
+        return [id, { slope, reference: number(reference) }];
+      }),
     ),
   };
 }

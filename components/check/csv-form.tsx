@@ -17,7 +17,7 @@ interface CsvFormProps {
 
 const METHODS = [
   { value: 'absolute', label: 'absolute' },
-  { value: 'two-reference', label: 'by two references' },
+  { value: 'two-reference', label: 'two references, 0 and 1' },
   { value: 'series-min-max', label: 'by the series’ own range' },
 ];
 
@@ -42,17 +42,17 @@ export function CsvForm({ draft, table, errors, onChange }: CsvFormProps) {
             name="series that the parameters are for"
             value={series ?? ''}
             options={[
-              { value: '', label: 'every series without its own' },
+              { value: '', label: 'all series' },
               ...table.series.map(({ id, label }) => ({
                 value: id,
-                label: draft.own[id] ? `${label} (its own)` : label,
+                label: `${label}: ${draft.own[id] ? 'its own' : 'as all series'}`,
               })),
             ]}
             onChange={(value) => setShown(value === '' ? null : value)}
           />
           {series === null ? null : (
             <Button className="mt-1" onClick={() => onChange({ ...draft, own: toggled(draft, series) })}>
-              {own ? 'Use those for every series' : 'State its own'}
+              {own ? 'State it as all series' : 'State its own'}
             </Button>
           )}
         </FormRow>

@@ -24,9 +24,6 @@ export function DatasetHead({ data, invented, onEdit }: DatasetHeadProps) {
         <Button onClick={() => saveFile('assessment.json', JSON.stringify(assessment, null, 2))}>
           Save assessment
         </Button>
-        <Button onClick={() => saveFile('dataset.json', JSON.stringify(document, null, 2))}>
-          Save document
-        </Button>
       </p>
       {document.abstract ? (
         <Disclosure className="mt-2" summary="Abstract">

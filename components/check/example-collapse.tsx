@@ -3,7 +3,7 @@
 import { useState } from 'react';
 import { CollapsePanel } from '@/components/plots/collapse-panel';
 import { openingWindow } from '@/components/plots/energy-window';
-import { energiesOf, plotDataOf } from '@/components/plots/plot-data';
+import { plotDataOf, pointsOf } from '@/components/plots/plot-data';
 import type { Assessment } from '@/lib/engine/assessment';
 import type { DatasetDocument } from '@/schemas/dataset-1.generated';
 import { CollapseSwitch } from './collapse-switch';
@@ -18,7 +18,7 @@ interface ExampleCollapseProps {
 export function ExampleCollapse({ document, assessment }: ExampleCollapseProps) {
   const [byLigand, setByLigand] = useState<string | null>(null);
   const data = plotDataOf(document, assessment);
-  const window = openingWindow(energiesOf(data));
+  const window = openingWindow(pointsOf(data));
   return (
     <div className="flex grow flex-col">
       <CollapseSwitch data={data} byLigand={byLigand} onChange={setByLigand} />

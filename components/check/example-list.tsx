@@ -25,7 +25,9 @@ export function ExampleList({ onExample, onTable, busy }: ExampleListProps) {
           <Button disabled={busy} onClick={onTable}>
             A table of points
           </Button>
-          <p className="text-sm text-soft">CSV, one row a point; its parameters are then typed in a form.</p>
+          <p className="text-sm text-soft">
+            CSV, one row a point, with its parameters typed in the form beside it.
+          </p>
         </li>
       </ul>
     </section>

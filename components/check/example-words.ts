@@ -1,4 +1,7 @@
 import type { ExampleDocument } from '@/lib/documents/examples/examples';
+import { readCsvPoints } from '@/lib/documents/read-csv-points';
+import type { CsvDraft } from './csv-draft';
+import { draftOfDocument } from './draft-of-document';
 
 export type ExampleSlug = ExampleDocument['slug'];
 
@@ -37,6 +40,8 @@ export async function loadExample(slug: ExampleSlug): Promise<string> {
   return JSON.stringify(EXAMPLES.find((example) => example.slug === slug)?.document, null, 2);
 }
 
-export async function loadExampleTable(): Promise<string> {
-  return (await import('@/lib/documents/examples/examples')).EXAMPLE_TABLE;
+/** The example table, and the form beside it as the same laboratory would fill it. */
+export async function loadExampleTable(): Promise<{ text: string; draft: CsvDraft }> {
+  const { EXAMPLES, EXAMPLE_TABLE } = await import('@/lib/documents/examples/examples');
+  return { text: EXAMPLE_TABLE, draft: draftOfDocument(EXAMPLES[0].document, readCsvPoints(EXAMPLE_TABLE)) };
 }

@@ -28,7 +28,7 @@ export function InlineQuantity(props: InlineQuantityProps) {
   const id = useId();
   return (
     <div>
-      <div className="flex items-baseline gap-1.5">
+      <div className="flex flex-wrap items-baseline gap-1.5">
         <input
           type="text"
           inputMode="decimal"
@@ -62,7 +62,7 @@ export function InlineQuantity(props: InlineQuantityProps) {
             disabled={disabled}
             value={unit}
             onChange={({ target }) => onUnit(target.value)}
-            className={`${INPUT} flex-1`}
+            className={`${INPUT} grow basis-16`}
           >
             {units.map((choice) => (
               <option key={choice.value} value={choice.value} className="bg-ground text-ink">

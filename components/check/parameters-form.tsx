@@ -140,8 +140,9 @@ function orientedUnit(
   orientation: ParametersDraft['gap']['orientation'],
 ): Partial<ParametersDraft['gap']> {
   const fitting: readonly string[] = unit === 'ratio' ? RATIO_ORIENTATIONS : ENERGY_ORIENTATIONS;
-  if (fitting.includes(orientation)) return { unit };
-  return { unit, orientation: fitting[0] as ParametersDraft['gap']['orientation'] };
+  // An uncertainty typed in the old unit would be another one in the new.
+  if (fitting.includes(orientation)) return { unit, u: '' };
+  return { unit, u: '', orientation: fitting[0] as ParametersDraft['gap']['orientation'] };
 }
 
 interface ConstantFieldsProps {

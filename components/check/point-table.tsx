@@ -1,9 +1,9 @@
 'use client';
 
 import { useState } from 'react';
-import type { EnergyWindow } from '@/components/plots/energy-window';
+import { type EnergyWindow, isInside } from '@/components/plots/energy-window';
 import { FlagMark } from '@/components/plots/flag-mark';
-import { concentrationAt, FLAG_WORDS, type PlotData } from '@/components/plots/plot-data';
+import { concentrationAt, FLAG_WORDS, type PlotData, pointsOf } from '@/components/plots/plot-data';
 import { Button } from '@/components/ui/button';
 import { type DataColumn, DataTable } from '@/components/ui/data-table';
 import { formatCount, formatNumber, formatPValue, formatScore } from '@/components/ui/format-quantity';
@@ -31,6 +31,7 @@ export function PointTable({ data, window }: PointTableProps) {
     flag: flag === 'all' ? null : (flag as Flag),
     window,
   });
+  const isWhole = pointsOf(data).every(({ energy }) => isInside(energy, window));
   const pages = Math.max(1, Math.ceil(rows.length / ROWS_A_PAGE));
   const shown = Math.min(page, pages - 1);
   const choose = (set: (value: string) => void) => (event: { target: { value: string } }) => {
@@ -40,7 +41,7 @@ export function PointTable({ data, window }: PointTableProps) {
   return (
     <section aria-label="Points as a table" id="points" className="py-8">
       <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-3">
-        <h2 className="head text-xl">Points</h2>
+        <h2 className="head text-xl">{isWhole ? 'Points' : 'Points within the window of energies'}</h2>
         <div className="flex flex-wrap items-end gap-4">
           <SelectField
             label="series"
@@ -166,6 +167,13 @@ function columnsOf(data: PlotData): DataColumn<PointTableRow>[] {
       unit: '± u',
       numeric: true,
       cell: ({ point }) => <Quantity value={point.expected} u={point.expectedU} />,
+    },
+    {
+      key: 'residual',
+      head: 'residual',
+      unit: '± u',
+      numeric: true,
+      cell: ({ point }) => <Quantity value={point.residual} u={point.residualU} />,
     },
     {
       key: 'z',

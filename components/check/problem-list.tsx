@@ -19,16 +19,18 @@ export function ProblemList({ problems, text, onLine }: ProblemListProps) {
     problems.length === 1 ? 'One thing to mend' : `${formatCount(problems.length)} things to mend`;
   return (
     <Notice kind="error" title={title} live>
-      <ol className="max-h-[34rem] space-y-3 overflow-y-auto">
-        {problems.slice(0, MOST_SHOWN).map((problem) => (
-          <li
-            key={`${problem.line} ${problem.column} ${problem.pointer} ${problem.detail}`}
-            className="border-hairline border-b pb-2.5"
-          >
-            <p className="first-letter:uppercase">{problem.detail}</p>
-            <Place problem={problem} excerpt={excerptOf(lines, problem)} onLine={onLine} />
-          </li>
-        ))}
+      <ol className="thin-scroll max-h-[34rem] space-y-3 overflow-y-auto">
+        {inOrder(problems)
+          .slice(0, MOST_SHOWN)
+          .map((problem) => (
+            <li
+              key={`${problem.line} ${problem.column} ${problem.pointer} ${problem.detail}`}
+              className="border-hairline border-b pb-2.5"
+            >
+              <p>{sentence(problem.detail)}</p>
+              <Place problem={problem} excerpt={excerptOf(lines, problem)} onLine={onLine} />
+            </li>
+          ))}
       </ol>
       {problems.length > MOST_SHOWN ? (
         <p className="text-sm text-soft">
@@ -37,6 +39,16 @@ export function ProblemList({ problems, text, onLine }: ProblemListProps) {
       ) : null}
     </Notice>
   );
+}
+
+/** From the top of the text down; what has no line comes first. */
+function inOrder(problems: readonly SourceProblem[]): SourceProblem[] {
+  return [...problems].sort((a, b) => (a.line ?? 0) - (b.line ?? 0) || (a.column ?? 0) - (b.column ?? 0));
+}
+
+/** With a capital, unless it begins with the reader's own words in quotation marks. */
+function sentence(detail: string): string {
+  return /^[a-z]/.test(detail) ? detail.charAt(0).toUpperCase() + detail.slice(1) : detail;
 }
 
 interface PlaceProps {
@@ -63,7 +75,8 @@ function Place({ problem: { line, column, pointer }, excerpt, onLine }: PlacePro
 
 function excerptOf(lines: readonly string[], { line, column }: SourceProblem): string | null {
   const text = line === null ? undefined : lines[line - 1];
-  if (text === undefined) return null;
+  // A bare brace tells nothing.
+  if (text === undefined || !/[\w"]/.test(text)) return null;
   const from = Math.max(0, (column ?? 1) - 1 - LONGEST_EXCERPT / 2);
   return text.length <= LONGEST_EXCERPT
     ? text.trim()

@@ -44,8 +44,8 @@ export function SeriesRow({ series, window, width, lit, chosen, onLight, onChoos
         }
         axis={<SeriesStrip points={assessed.points} window={window} width={width} lit={lit} />}
         verdict={
-          <div className="figures grid h-full grid-cols-[1fr_1fr_1fr] items-center gap-2 py-1">
-            <span>
+          <div className="figures grid h-full grid-cols-[auto_1fr_1fr] items-center gap-2 py-1">
+            <span className="min-w-14 whitespace-nowrap">
               {onCurve} / {stated.points.length}
             </span>
             <span className={`text-right ${misses ? 'font-semibold text-off' : ''}`}>

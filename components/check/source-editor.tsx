@@ -77,10 +77,12 @@ export function SourceEditor({ source, area, busy, onSource, onRefused, onAssess
         className="source-text min-h-[26rem] w-full grow resize-y bg-transparent px-3 py-2.5 text-ink placeholder:text-soft max-lg:min-h-[18rem] max-lg:px-0"
       />
       <div className="flex flex-wrap items-center gap-x-6 gap-y-2 border-hairline border-t px-2 py-3 max-lg:px-0">
-        <Button variant="primary" disabled={busy || source.text.trim() === ''} onClick={onAssess}>
+        <Button type="submit" variant="primary" disabled={busy || source.text.trim() === ''}>
           {busy ? 'Computing' : 'Assess'}
         </Button>
-        <p className="text-sm text-soft">Nothing is stored. Ctrl + Enter does the same.</p>
+        <p className="text-sm text-soft">
+          Nothing is stored on the server. In the text, Ctrl + Enter assesses.
+        </p>
       </div>
     </div>
   );

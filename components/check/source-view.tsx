@@ -53,59 +53,67 @@ export function SourceView(props: SourceViewProps) {
   const isTable = source.text.trim() !== '' && kindOf(source) === 'table';
   const table = isTable ? readCsvPoints(source.text) : null;
   return (
-    <AxisFrame
-      who={
-        <>
-          <h1 className="head text-3xl">Check data</h1>
-          <p className="mt-3 text-soft">
-            The server recomputes every point’s free-energy coordinate from the parameters that you state, and
-            shows which points miss the master curve. Nobody signs in.
-          </p>
-          {hasResult ? (
-            <p className="mt-3">
-              <Button onClick={props.onResult}>Back to the last assessment</Button>
+    <form
+      className="flex grow flex-col"
+      onSubmit={(event) => {
+        event.preventDefault();
+        onAssess();
+      }}
+    >
+      <AxisFrame
+        who={
+          <>
+            <h1 className="head text-3xl">Check data</h1>
+            <p className="mt-3 text-soft">
+              The server recomputes every point’s free-energy coordinate from the parameters that you state,
+              and shows which points miss the master curve. Nobody signs in.
             </p>
-          ) : null}
-          {table && draft && table.series.length > 0 ? (
-            <CsvForm
-              draft={draft}
-              table={table}
-              errors={outcome?.kind === 'to-mend' ? outcome.formErrors : NO_ERRORS}
-              onChange={onDraft}
-            />
-          ) : (
-            <Forms />
-          )}
-        </>
-      }
-      axis={
-        <SourceEditor
-          source={source}
-          area={area}
-          busy={busy}
-          onSource={onSource}
-          onRefused={onRefused}
-          onAssess={onAssess}
-        />
-      }
-      verdict={
-        <div className="space-y-7">
-          {outcome?.kind === 'to-mend' ? (
-            <ProblemList
-              problems={outcome.problems}
-              text={source.text}
-              onLine={(line, column) => area.current && selectLine(area.current, line, column)}
-            />
-          ) : null}
-          {outcome?.kind === 'refused' ? (
-            <Notice kind="error" title={outcome.title} live>
-              <p>{outcome.detail}</p>
-            </Notice>
-          ) : null}
-          <ExampleList busy={busy} onExample={onExample} onTable={onTable} />
-        </div>
-      }
-    />
+            {hasResult ? (
+              <p className="mt-3">
+                <Button onClick={props.onResult}>Back to the last assessment</Button>
+              </p>
+            ) : null}
+            {table && draft && table.series.length > 0 ? (
+              <CsvForm
+                draft={draft}
+                table={table}
+                errors={outcome?.kind === 'to-mend' ? outcome.formErrors : NO_ERRORS}
+                onChange={onDraft}
+              />
+            ) : (
+              <Forms />
+            )}
+          </>
+        }
+        axis={
+          <SourceEditor
+            source={source}
+            area={area}
+            busy={busy}
+            onSource={onSource}
+            onRefused={onRefused}
+            onAssess={onAssess}
+          />
+        }
+        verdict={
+          <div className="space-y-7">
+            {outcome?.kind === 'to-mend' ? (
+              <ProblemList
+                problems={outcome.problems}
+                text={source.text}
+                onLine={(line, column) => area.current && selectLine(area.current, line, column)}
+              />
+            ) : null}
+            {outcome?.kind === 'refused' ? (
+              <Notice kind="error" title={outcome.title} live>
+                <p>{outcome.detail}</p>
+              </Notice>
+            ) : null}
+            <ExampleList busy={busy} onExample={onExample} onTable={onTable} />
+          </div>
+        }
+      />
+    </form>
   );
 }
 

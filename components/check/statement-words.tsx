@@ -32,7 +32,7 @@ export interface StatementWords {
 export function gapWords(gap: Gap, temperatureKelvin: number): StatementWords {
   const { valueKT, uKT } = gapToKT(gap, temperatureKelvin);
   const convention = ORIENTATION_WORDS[gap.orientation];
-  const towards = valueKT >= 0 ? 'towards active' : 'towards inactive';
+  const towards = valueKT === 0 ? 'favours neither state' : `favours ${valueKT > 0 ? 'active' : 'inactive'}`;
   const stated = <Quantity value={gap.value} u={gap.u} unit={gap.unit === 'ratio' ? undefined : gap.unit} />;
   if (gap.unit === 'kT' && gap.orientation === 'inactive-minus-active') {
     return { stated, convention: `${convention}, ${towards}` };

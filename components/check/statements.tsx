@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react';
+import { Fragment, type ReactNode } from 'react';
 import type { PlotData, PlotSeries } from '@/components/plots/plot-data';
 import { Button } from '@/components/ui/button';
 import { formatQuantity } from '@/components/ui/format-quantity';
@@ -28,7 +28,7 @@ export function Statements({ data, chosen, onChoose }: StatementsProps) {
   const count = data.series.length;
   return (
     <section aria-label="Statements" className="mt-5">
-      <div className="flex items-baseline justify-between gap-3 border-ink border-b pb-1.5">
+      <div className="flex flex-wrap items-baseline justify-between gap-x-3 border-ink border-b pb-1.5">
         <h2 className="flex min-w-0 items-baseline gap-2 font-semibold">
           <SeriesDot colour={series.colour} />
           <span className="truncate">{series.label}</span>
@@ -43,9 +43,7 @@ export function Statements({ data, chosen, onChoose }: StatementsProps) {
           </p>
         ) : null}
       </div>
-      <dl>
-        <Parameters data={data} series={series} />
-      </dl>
+      <Parameters data={data} series={series} />
       <Predictions data={data} series={series} />
     </section>
   );
@@ -67,54 +65,60 @@ function Parameters({ data, series }: { data: PlotData; series: PlotSeries }) {
   const nameOf = (ligand: string) => data.document.ligands.find(({ id }) => id === ligand)?.name ?? ligand;
   return (
     <>
-      {parameters.gap ? <Row label="Energy gap" words={gapWords(parameters.gap, kelvin)} /> : null}
-      {parameters.siteClasses.map((siteClass) => (
-        <div key={siteClass.id}>
-          {many ? (
-            <div className="pt-2.5 font-semibold text-soft text-xs">site class {siteClass.id}</div>
-          ) : null}
-          <Row
-            label="Sites"
-            words={{ stated: <Quantity value={siteClass.sites.value} u={siteClass.sites.u} /> }}
-          />
-          {siteClass.gapPerSite ? (
-            <Row label="Gap per site" words={gapWords(siteClass.gapPerSite, kelvin)} />
-          ) : null}
-          {siteClass.binding.map((binding) => (
-            <div key={binding.ligand}>
-              <Row
-                symbol="K"
-                label="inactive"
-                note={several ? nameOf(binding.ligand) : undefined}
-                words={constantWords(binding.inactive)}
-              />
-              <Row
-                symbol="K"
-                label="active"
-                note={several ? nameOf(binding.ligand) : undefined}
-                words={constantWords(binding.active)}
-              />
-            </div>
-          ))}
-        </div>
-      ))}
-      {parameters.modulation?.map(({ modulator: id, slope, reference }) => {
-        const modulator = data.document.modulators?.find((one) => one.id === id);
-        const note = `from ${formatQuantity(reference, 0, modulator?.unit)}`;
-        return (
-          <Row
-            key={id}
-            label={modulator?.name ?? id}
-            note={note}
-            words={slopeWords(slope, modulator, kelvin)}
-          />
-        );
-      })}
-      {parameters.correlations?.length ? (
-        <Row label="Correlations" words={{ stated: `${parameters.correlations.length} stated` }} />
+      {parameters.gap ? (
+        <dl>
+          <Row label="Energy gap" words={gapWords(parameters.gap, kelvin)} />
+        </dl>
       ) : null}
-      <Row label="Origin" words={{ stated: ORIGIN_WORDS[parameters.origin] }} />
-      <Row label="Temperature" words={temperatureWords(temperature ?? data.document.temperature)} />
+      {parameters.siteClasses.map((siteClass) => (
+        <Fragment key={siteClass.id}>
+          {many ? <GroupHead>site class {siteClass.id}</GroupHead> : null}
+          <dl>
+            <Row
+              label="Sites"
+              words={{ stated: <Quantity value={siteClass.sites.value} u={siteClass.sites.u} /> }}
+            />
+            {siteClass.gapPerSite ? (
+              <Row label="Gap per site" words={gapWords(siteClass.gapPerSite, kelvin)} />
+            ) : null}
+            {siteClass.binding.map((binding) => (
+              <Fragment key={binding.ligand}>
+                <Row
+                  symbol="K"
+                  label="inactive"
+                  note={several ? nameOf(binding.ligand) : undefined}
+                  words={constantWords(binding.inactive)}
+                />
+                <Row
+                  symbol="K"
+                  label="active"
+                  note={several ? nameOf(binding.ligand) : undefined}
+                  words={constantWords(binding.active)}
+                />
+              </Fragment>
+            ))}
+          </dl>
+        </Fragment>
+      ))}
+      <dl>
+        {parameters.modulation?.map(({ modulator: id, slope, reference }) => {
+          const modulator = data.document.modulators?.find((one) => one.id === id);
+          const note = `from ${formatQuantity(reference, 0, modulator?.unit)}`;
+          return (
+            <Row
+              key={id}
+              label={modulator?.name ?? id}
+              note={note}
+              words={slopeWords(slope, modulator, kelvin)}
+            />
+          );
+        })}
+        {parameters.correlations?.length ? (
+          <Row label="Correlations" words={{ stated: `${parameters.correlations.length} stated` }} />
+        ) : null}
+        <Row label="Origin" words={{ stated: ORIGIN_WORDS[parameters.origin] }} />
+        <Row label="Temperature" words={temperatureWords(temperature ?? data.document.temperature)} />
+      </dl>
     </>
   );
 }
@@ -130,7 +134,7 @@ interface RowProps {
 
 function Row({ label, symbol, note, words }: RowProps) {
   return (
-    <div className="grid grid-cols-[7.25rem_minmax(0,1fr)] gap-x-3 border-hairline border-b py-1.5">
+    <div className="grid grid-cols-[7.25rem_minmax(0,1fr)] gap-x-3 border-hairline border-b py-1.5 lg:max-xl:grid-cols-1">
       <dt className="text-soft">
         {symbol ? <var className="symbol">{symbol} </var> : null}
         {label}
@@ -148,28 +152,38 @@ function Row({ label, symbol, note, words }: RowProps) {
   );
 }
 
+/** Above the rows of a site class or a ligand, where there are several. */
+function GroupHead({ children }: { children: ReactNode }) {
+  return <p className="pt-2.5 font-semibold text-soft text-xs">{children}</p>;
+}
+
 function Predictions({ data, series }: { data: PlotData; series: PlotSeries }) {
   const { derived, gapKT } = series.assessed;
   return (
     <>
-      <h3 className="mt-6 border-hairline border-b pb-1.5 font-semibold">What these statements predict</h3>
-      <dl>
-        {series.stated.parameters.siteClasses.some(({ gapPerSite }) => gapPerSite) ? (
+      <h3 className="mt-6 font-semibold">What these statements predict</h3>
+      <p className="border-hairline border-b pb-1.5 text-sm text-soft">
+        each ligand alone, modulators at their references
+      </p>
+      {series.stated.parameters.siteClasses.some(({ gapPerSite }) => gapPerSite) ? (
+        <dl>
           <Row label="Whole gap" words={{ stated: <Quantity value={gapKT} unit="kT" /> }} />
-        ) : null}
-        {derived.map((quantities) => (
-          <div key={quantities.ligand}>
-            {derived.length > 1 ? (
-              <div className="pt-2.5 font-semibold text-soft text-xs">
-                {data.document.ligands.find(({ id }) => id === quantities.ligand)?.name} alone
-              </div>
-            ) : null}
+        </dl>
+      ) : null}
+      {derived.map((quantities) => (
+        <Fragment key={quantities.ligand}>
+          {derived.length > 1 ? (
+            <GroupHead>
+              {data.document.ligands.find(({ id }) => id === quantities.ligand)?.name} alone
+            </GroupHead>
+          ) : null}
+          <dl>
             {rowsOf(quantities).map(([label, estimate, unit]) => (
               <Row key={label} label={label} words={{ stated: estimateWords(estimate, unit) }} />
             ))}
-          </div>
-        ))}
-      </dl>
+          </dl>
+        </Fragment>
+      ))}
     </>
   );
 }

@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect } from 'react';
+import { useEffect, useRef } from 'react';
 import type { EnergyWindow } from '@/components/plots/energy-window';
 import { orderedWindow } from '@/components/plots/energy-window';
 import { type ExampleSlug, isExampleSlug } from './example-words';
@@ -38,24 +38,46 @@ export function writeAddress({ example, window, byLigand }: CheckAddress): strin
     query.set('to', String(window.to));
   }
   if (byLigand) query.set('by', byLigand);
-  const text = query.toString();
-  return text === '' ? '' : `?${text}`;
+  if (!example) query.set('result', 'own');
+  return `?${query}`;
+}
+
+/** Whether an address is that of a result, not of the source. */
+function isResult(search: string): boolean {
+  const query = new URLSearchParams(search);
+  return query.has('result') || isExampleSlug(query.get('example'));
+}
+
+function step(search: string, kind: 'pushState' | 'replaceState'): void {
+  window.history[kind](
+    window.history.state,
+    '',
+    `${window.location.pathname}${search}${window.location.hash}`,
+  );
 }
 
 /**
- * Keeps the browser's address what the page shows, without a step in its history for every drag.
+ * Keeps the browser's address what the page shows. A result is a step of its own in the history, so that Back
+ * leads to the source again; a drag on the axis is none.
  *
- * @param address null while the page shows nothing yet: the address is then what is asked for, and is left alone
+ * @param result how the result is seen; null while the source is shown
+ * @param onStep told which of the two the reader went to by Back or Forward
  */
-export function useAddress(address: CheckAddress | null): void {
-  const search = address === null ? null : writeAddress(address);
+export function useAddress(result: CheckAddress | null, onStep: (toResult: boolean) => void): void {
+  const search = result === null ? '' : writeAddress(result);
+  const shown = useRef<boolean | null>(null);
   useEffect(() => {
-    if (search !== null && window.location.search !== search) {
-      window.history.replaceState(
-        window.history.state,
-        '',
-        `${window.location.pathname}${search}${window.location.hash}`,
-      );
-    }
-  }, [search]);
+    const isFirst = shown.current === null;
+    const turned = shown.current !== (result !== null);
+    shown.current = result !== null;
+    // At first the address is what is asked for, and is left alone.
+    if (isFirst || window.location.search === search) return;
+    const here = isResult(window.location.search) === (result !== null);
+    step(search, turned && !here ? 'pushState' : 'replaceState');
+  }, [search, result]);
+  useEffect(() => {
+    const follow = () => onStep(isResult(window.location.search));
+    window.addEventListener('popstate', follow);
+    return () => window.removeEventListener('popstate', follow);
+  }, [onStep]);
 }

@@ -37,7 +37,7 @@ export function Verdict({ data, window, full, onWindow }: VerdictProps) {
         <Figure
           label={
             <>
-              <MathSymbol>p</MathSymbol> of <MathSymbol>Q</MathSymbol>
+              <MathSymbol>p</MathSymbol> of all together
             </>
           }
           value={formatPValue(summary.pValue)}
@@ -50,8 +50,8 @@ export function Verdict({ data, window, full, onWindow }: VerdictProps) {
         parameters together. Chance alone would put about {chance(summary.expectedByChance.offCurve)} there,
         and {chance(summary.expectedByChance.warning)} among the warnings.
       </p>
-      <Notes data={data} />
       <WindowSection data={data} window={window} full={full} onWindow={onWindow} />
+      <Notes data={data} />
     </>
   );
 }
@@ -72,7 +72,7 @@ function chance(expected: number): string {
 /** What p of Q rests on, or why there is none. */
 function sentenceOnQ({ assessment }: PlotData): string {
   const { chiSquared, degreesOfFreedom, pValue } = assessment.summary;
-  const figures = `Q ${formatScore(chiSquared)} for ${formatCount(degreesOfFreedom)} degrees of freedom`;
+  const figures = `Weighted squares sum to ${formatScore(chiSquared)} for ${formatCount(degreesOfFreedom)} degrees of freedom`;
   if (pValue !== null) return `${figures}, shared parameters counted once.`;
   if (degreesOfFreedom === 0)
     return 'No p: as many parameters were fitted to these points as there are points.';
@@ -128,7 +128,7 @@ function WindowSection({ data, window, full, onWindow }: VerdictProps) {
       ) : (
         <p className="mt-2 text-sm text-soft">
           {formatCount(countFlags(inside)['on-curve'])} / {formatCount(inside.length)} points in it are on the
-          curve; {formatCount(below)} lie below it, {formatCount(above)} above.
+          curve; {formatCount(below)} more at lower energies, {formatCount(above)} at higher.
         </p>
       )}
     </div>

@@ -50,7 +50,7 @@ export function WindowFields({ window, full, onWindow }: WindowFieldsProps) {
       ) : null}
       <div className="mt-2 flex gap-4">
         <Button type="submit" disabled={wanted === null || typed === null}>
-          Show
+          Apply
         </Button>
         <Button onClick={() => onWindow(full)} disabled={isFull}>
           All energies

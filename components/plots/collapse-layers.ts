@@ -73,7 +73,7 @@ function plotItem(row: PointRow): number[] {
 }
 
 function residualItem(view: CollapseView): (row: PointRow) => number[] {
-  const bound = residualBound(view.data) - 0.25;
+  const bound = residualBound(view.data) - 0.7;
   return (row) => [row.energy, Math.max(-bound, Math.min(bound, row.z)), row.series, row.point];
 }
 

@@ -6,7 +6,7 @@ import { activityBounds, type CollapseView, PANEL_GAP, residualBound } from './c
 import { concentrationTicks } from './concentration-axis';
 import { describePoint } from './describe-point';
 
-const TRAVEL_MILLISECONDS = 700;
+export const TRAVEL_MILLISECONDS = 700;
 const LEVELS = [0, 0.25, 0.5, 0.75, 1];
 
 export function collapseOption(view: CollapseView): Record<string, unknown> {
@@ -138,6 +138,7 @@ function tooltip(view: CollapseView): Record<string, unknown> {
     trigger: 'item',
     renderMode: 'richText',
     confine: true,
+    position: cornerAwayFrom,
     transitionDuration: 0,
     backgroundColor: colours.ground,
     borderColor: colours.ink,
@@ -153,6 +154,21 @@ function tooltip(view: CollapseView): Record<string, unknown> {
       return lines.map(plainText).join('\n');
     },
   };
+}
+
+/** The corner of the plot that a sigmoid leaves empty, upper left, unless the point itself is there. */
+function cornerAwayFrom(
+  [x, y]: [number, number],
+  _params: unknown,
+  _element: unknown,
+  _area: unknown,
+  {
+    contentSize: [width, height],
+    viewSize: [whole],
+  }: { contentSize: [number, number]; viewSize: [number, number] },
+): [number, number] {
+  const isThere = x < width + 80 && y < height + 50;
+  return isThere ? [whole - width - 12, height + 60] : [48, 26];
 }
 
 /** Braces and bars would start the library's own styling. */

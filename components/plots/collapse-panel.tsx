@@ -1,7 +1,8 @@
 'use client';
 
 import dynamic from 'next/dynamic';
-import { useMemo, useRef, useSyncExternalStore } from 'react';
+import { useEffect, useMemo, useRef, useState, useSyncExternalStore } from 'react';
+import { TRAVEL_MILLISECONDS } from './collapse-option';
 import { type CollapseHeights, PANEL_GAP } from './collapse-view';
 import { concentrationAxisOf } from './concentration-axis';
 import type { EnergyWindow } from './energy-window';
@@ -41,11 +42,12 @@ export function CollapsePanel(props: CollapsePanelProps) {
   const axis = useMemo(() => (ligand === null ? null : concentrationAxisOf(data, ligand)), [data, ligand]);
   const curves = useMemo(() => (axis === null ? [] : responseCurves(data, axis)), [data, axis]);
   const by = byLigand === null ? ('energy' as const) : ('concentration' as const);
+  const travelling = useJustChanged(byLigand, TRAVEL_MILLISECONDS + 150);
   return (
     <div ref={box} className="flex min-h-[400px] grow flex-col lg:min-h-[clamp(30rem,100dvh_-_14rem,52rem)]">
       {height === 0 ? null : (
         <CollapseChart
-          view={{ data, window, axis, curves, by, lit, animate: !still, heights }}
+          view={{ data, window, axis, curves, by, lit, animate: travelling && !still, heights }}
           sentence={sentence}
           onPoint={onPoint}
           onChoose={onChoose}
@@ -55,6 +57,16 @@ export function CollapsePanel(props: CollapsePanelProps) {
       )}
     </div>
   );
+}
+
+/** Whether a value changed within the last so many milliseconds: points travel then, and at no other time. */
+function useJustChanged(value: unknown, milliseconds: number): boolean {
+  const [settled, setSettled] = useState(value);
+  useEffect(() => {
+    const timer = setTimeout(() => setSettled(value), milliseconds);
+    return () => clearTimeout(timer);
+  }, [value, milliseconds]);
+  return settled !== value;
 }
 
 function heightsIn(height: number): CollapseHeights {

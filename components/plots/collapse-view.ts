@@ -35,8 +35,8 @@ export const LARGE = 3000;
 
 /** Bounds of the activity axis: the curve with air, wider where points lie outside; rounded so that it rests. */
 export function activityBounds(data: PlotData): { low: number; high: number } {
-  let low = -0.13;
-  let high = 1.12;
+  let low = -0.17;
+  let high = 1.18;
   for (const { assessed } of data.series) {
     for (const { activity, activityU } of assessed.points) {
       low = Math.min(low, activity - activityU - 0.02);

@@ -1,4 +1,5 @@
 /** Windows on the free-energy axis, in kT: what the plot, the ruler and the strips show. */
+import type { AssessedPoint } from '@/lib/engine/assessment';
 
 export interface EnergyWindow {
   /** left edge, kT */
@@ -13,10 +14,18 @@ export const NARROWEST_WINDOW = 0.2;
 const FLAT_BEYOND = 10;
 const ALWAYS_SHOWN = 4;
 
-/** The window that a dataset opens with: all energies, but not beyond where the curve is flat. */
-export function openingWindow(energies: Iterable<number>): EnergyWindow {
-  const { from, to } = fullWindow(energies);
-  return { from: Math.max(from, -FLAT_BEYOND), to: Math.min(to, FLAT_BEYOND) };
+/**
+ * The window that a dataset opens with: all energies, but beyond where the curve is flat only as far as a
+ * point is flagged. No warning and no miss is ever outside it.
+ */
+export function openingWindow(points: Iterable<Pick<AssessedPoint, 'energy' | 'flag'>>): EnergyWindow {
+  const all = [...points];
+  const full = fullWindow(all.map(({ energy }) => energy));
+  const flagged = fullWindow(all.filter(({ flag }) => flag !== 'on-curve').map(({ energy }) => energy));
+  return {
+    from: Math.max(full.from, Math.min(flagged.from, -FLAT_BEYOND)),
+    to: Math.min(full.to, Math.max(flagged.to, FLAT_BEYOND)),
+  };
 }
 
 /** The window that holds every energy, with half a kT of air; never narrower than the bend of the curve. */
@@ -58,6 +67,13 @@ export function moveWindow(window: EnergyWindow, share: number): EnergyWindow {
   return { from: window.from + step, to: window.to + step };
 }
 
+/** A window pushed back so that none of it is beyond another one, as far as it fits. */
+export function keptWithin(window: EnergyWindow, full: EnergyWindow): EnergyWindow {
+  const width = Math.min(window.to - window.from, full.to - full.from);
+  const from = Math.max(full.from, Math.min(window.from, full.to - width));
+  return { from, to: from + width };
+}
+
 export function scaleWindow(window: EnergyWindow, factor: number): EnergyWindow {
   const middle = (window.from + window.to) / 2;
   const half = Math.max(NARROWEST_WINDOW, (window.to - window.from) * factor) / 2;
@@ -74,11 +90,11 @@ export interface Tick {
   labelled: boolean;
 }
 
-/** Ticks of an axis: a label about every 90 pixels, and a smaller tick halfway. */
+/** Ticks of an axis: a label about every 70 pixels, and a smaller tick halfway. */
 export function ticksOf(window: EnergyWindow, width: number): Tick[] {
   const span = window.to - window.from;
-  const most = Math.max(2, width / 90);
-  const fitting = [0.02, 0.1, 0.2, 1, 2, 4, 10, 20, 100, 200].find((size) => span / size <= most);
+  const most = Math.max(2, width / 70);
+  const fitting = [0.02, 0.1, 0.2, 0.5, 1, 2, 5, 10, 20, 50, 100, 200].find((size) => span / size <= most);
   // An address may ask for a window of any width: its ticks stay few.
   const step = fitting ?? 10 ** Math.ceil(Math.log10(span / most));
   const ticks: Tick[] = [];

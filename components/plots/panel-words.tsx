@@ -21,7 +21,7 @@ export function PanelWords({ data, byLigand }: PanelWordsProps) {
           </p>
         ) : null}
         <p className="absolute top-full left-2 pt-1 font-semibold text-xs">
-          Residual, standard uncertainties
+          Residual{byLigand === null ? '' : ' by energy'}, standard uncertainties
           {exceedsResidualPanel(data) ? (
             <span className="font-normal text-soft"> · beyond ±9 at the edge</span>
           ) : null}

@@ -39,8 +39,12 @@ export function plotDataOf(document: DatasetDocument, assessment: Assessment): P
   };
 }
 
-export function* energiesOf(data: PlotData): Generator<number> {
-  for (const { assessed } of data.series) for (const { energy } of assessed.points) yield energy;
+export function pointsOf(data: PlotData): AssessedPoint[] {
+  return data.series.flatMap(({ assessed }) => assessed.points);
+}
+
+export function energiesOf(data: PlotData): number[] {
+  return pointsOf(data).map(({ energy }) => energy);
 }
 
 /** Concentration of a ligand at a point, in the ligand's unit; 0 where left out. */

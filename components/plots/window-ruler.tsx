@@ -5,6 +5,7 @@ import { MINUS } from '@/components/ui/format-quantity';
 import {
   type EnergyWindow,
   energyAtPixel,
+  keptWithin,
   moveWindow,
   orderedWindow,
   pixelOf,
@@ -117,19 +118,19 @@ export function windowAfterKey(key: string, window: EnergyWindow, full: EnergyWi
   switch (key) {
     case 'ArrowLeft':
     case 'ArrowDown':
-      return moveWindow(window, -0.1);
+      return keptWithin(moveWindow(window, -0.1), full);
     case 'ArrowRight':
     case 'ArrowUp':
-      return moveWindow(window, 0.1);
+      return keptWithin(moveWindow(window, 0.1), full);
     case 'PageDown':
-      return moveWindow(window, -0.5);
+      return keptWithin(moveWindow(window, -0.5), full);
     case 'PageUp':
-      return moveWindow(window, 0.5);
+      return keptWithin(moveWindow(window, 0.5), full);
     case '+':
     case '=':
       return scaleWindow(window, 0.8);
     case '-':
-      return scaleWindow(window, 1.25);
+      return keptWithin(scaleWindow(window, 1.25), full);
     case 'Home':
     case 'Escape':
       return full;

@@ -42,8 +42,9 @@ function findFirstError(text: string): SyntaxProblem | null {
   visit(
     text,
     {
-      onError(code, _offset, _length, line, character) {
-        first ??= { line: line + 1, column: character + 1, detail: sayWhatIsRight(code) };
+      onError(code, offset, _length, line, character) {
+        const detail = isDecimalComma(text, offset) ? DECIMAL_COMMA : RIGHT[code];
+        first ??= { line: line + 1, column: character + 1, detail };
       },
     },
     { disallowComments: true, allowTrailingComma: false, allowEmptyContent: false },
@@ -71,6 +72,9 @@ const RIGHT: Record<ParseErrorCode, string> = {
   16: 'a line break, tab or control character within a text must be written as \\n, \\t or \\u and four digits',
 };
 
-function sayWhatIsRight(code: ParseErrorCode): string {
-  return RIGHT[code];
+const DECIMAL_COMMA = 'a number takes a decimal point, not a comma: 0.15';
+
+/** Whether the place stands right behind a comma between two digits. */
+function isDecimalComma(text: string, offset: number): boolean {
+  return /\d,$/.test(text.slice(Math.max(0, offset - 2), offset)) && /\d/.test(text.charAt(offset));
 }

@@ -60,7 +60,7 @@ function sortCells(
     const text = cell.trim();
     const column = columns[index];
     if (text === '') return;
-    if (column === undefined) complain(index + 1, `there is no heading above ${quote(text)}`);
+    if (column === undefined) complain(index + 1, sayNoHeading(text, decimalComma));
     else if (column.holds === 'series') row.series = text;
     else if (column.holds !== 'nothing') {
       const number = readNumber(text, decimalComma);
@@ -117,6 +117,14 @@ function readNumber(text: string, decimalComma: boolean): number | null {
   const pointed = decimalComma && !ascii.includes('.') ? ascii.replace(',', '.') : ascii;
   const number = NUMBER.test(pointed) ? Number(pointed) : Number.NaN;
   return Number.isFinite(number) ? number : null;
+}
+
+/** In a table with commas between its cells a decimal comma makes a cell too many. */
+function sayNoHeading(text: string, decimalComma: boolean): string {
+  const hint = decimalComma
+    ? ''
+    : '; numbers with a decimal comma need another delimiter, such as a semicolon';
+  return `there is no heading above ${quote(text)}${hint}`;
 }
 
 function sayNotANumber(text: string): string {

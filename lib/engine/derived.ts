@@ -38,7 +38,7 @@ export function deriveQuantities(
     const response = new LigandResponse(model, index);
     const direction = response.direction();
     const saturation = response.energyAtSaturation();
-    const name = `“${ligand.id}”`;
+    const name = ligand.name ?? ligand.id;
     if (direction === 0) return;
     if (saturation === null) {
       notes.push(

@@ -116,6 +116,8 @@ export interface SeriesInput {
 
 export interface LigandInput {
   id: string;
+  /** what notes call it; the id where left out */
+  name?: string;
   unit: ConcentrationUnit;
   concentration: 'free' | 'total';
   /** relative standard uncertainty of dispensing, independent from point to point */

@@ -74,7 +74,7 @@ function noteDepletion(dataset: DatasetInput, series: SeriesInput): Note[] {
     return [
       {
         code: 'depletion' as const,
-        detail: `At ${counted(points.length, 'point', 'points')} the protein could bind more than a tenth of “${ligand.id}”, whose total concentration is stated: the energy is computed from a concentration that the protein itself has lowered.`,
+        detail: `At ${counted(points.length, 'point', 'points')} the protein could bind more than a tenth of ${ligand.name ?? ligand.id}, whose total concentration is stated: the energy is computed from a concentration that the protein itself has lowered.`,
         points,
       },
     ];
