@@ -82,3 +82,13 @@ describe('20,000 levels of nesting', () => {
     expect(parseDocument(source)).toMatchObject({ ok: false, reason: 'syntax', line: 1, column: 501 });
   });
 });
+
+it('says of a decimal comma that it is one', () => {
+  expect(parseDocument('{ "u": 0,15 }')).toMatchObject({
+    ok: false,
+    reason: 'syntax',
+    line: 1,
+    column: 10,
+    detail: 'a number takes a decimal point, not a comma: 0.15',
+  });
+});

@@ -93,7 +93,12 @@ describe('what is wrong with a table', () => {
     ['wt,1,0.4l,,,', 2, 3, '“0.4l” is not a number'],
     ['wt,1,"0,41",,,', 2, 3, '“0,41” is not a number; did you mean 0.41?'],
     ['wt,1e999,0.4,,,', 2, 2, '“1e999” is not a number'],
-    ['wt,1,0.4,,,,7', 2, 7, 'there is no heading above “7”'],
+    [
+      'wt,1,0.4,,,,7',
+      2,
+      7,
+      'there is no heading above “7”; numbers with a decimal comma need another delimiter, such as a semicolon',
+    ],
     [',1,0.4,,,', 2, 1, 'the name of the series must stand here'],
     ['wt,1,,,,', 2, 3, 'a measured activity must stand here'],
     ['wt,1,0.4,,0.4,0.5', 2, 3, 'a row takes an activity or replicates, not both'],
