@@ -4,6 +4,8 @@
  * @returns null where the text is no number
  */
 export function readNumber(text: string): number | null {
+  // To some 1,000 is one, to others a thousand: a thousand-fold slip must not start here.
+  if (/^\s*[+\-\u2212]?[1-9]\d{0,2}(,\d{3})+\s*$/.test(text)) return null;
   const plain = text
     .trim()
     .replace(/^\u2212/, '-')

@@ -1,6 +1,7 @@
 /** What is pasted, dropped or chosen: what is wrong with it is said at its place, and nothing of it is lost. */
 import type { Page } from 'playwright-core';
 import { describe, expect, it } from 'vitest';
+import { LARGEST_SOURCE } from '@/components/check/read-source';
 import type { DocumentError } from '@/lib/documents/document-error';
 import { EXAMPLE_TABLE } from '@/lib/documents/examples/examples';
 import { locatePointers } from '@/lib/documents/locate-pointer';
@@ -109,6 +110,17 @@ describeInBrowser('what is given to the page', ({ newPage, url }) => {
     const choose = (page: Page, name: string, buffer: Buffer) =>
       page.locator('input[type=file]').setInputFiles({ name, mimeType: 'application/octet-stream', buffer });
 
+    /** Drops a file that holds a text so many times; it is made in the browser. */
+    const drop = (page: Page, name: string, text: string, times: number) =>
+      editorIn(page).evaluate(
+        (area, given) => {
+          const dataTransfer = new DataTransfer();
+          dataTransfer.items.add(new File([given.text.repeat(given.times)], given.name));
+          area.dispatchEvent(new DragEvent('drop', { dataTransfer, bubbles: true, cancelable: true }));
+        },
+        { name, text, times },
+      );
+
     it('is read into the editor', async () => {
       const page = await open();
       await choose(page, 'set.json', Buffer.from(JSON.stringify(contractDocument())));
@@ -122,7 +134,7 @@ describeInBrowser('what is given to the page', ({ newPage, url }) => {
       await paste(page, 'what was typed before');
       await choose(page, 'sheet.xlsx', Buffer.from([80, 75, 3, 4, 0, 0, 0]));
       await page.getByText('sheet.xlsx is not a text file. Save the sheet as CSV').waitFor();
-      await choose(page, 'big.json', Buffer.alloc(8 * 1024 * 1024 + 1, 32));
+      await drop(page, 'big.json', ' '.repeat(10), LARGEST_SOURCE / 10 + 1);
       await page.getByText('big.json is larger than 8 MiB').waitFor();
       expect(await noticeIn(page).textContent()).toContain('This file was not taken');
       expect(await editorIn(page).inputValue()).toBe('what was typed before');
@@ -131,11 +143,7 @@ describeInBrowser('what is given to the page', ({ newPage, url }) => {
 
     it('is dropped on the editor', async () => {
       const page = await open();
-      await editorIn(page).evaluate((area) => {
-        const dataTransfer = new DataTransfer();
-        dataTransfer.items.add(new File(['series,velline (uM),activity\n'], 'dropped.csv'));
-        area.dispatchEvent(new DragEvent('drop', { dataTransfer, bubbles: true, cancelable: true }));
-      });
+      await drop(page, 'dropped.csv', 'series,velline (uM),activity\n', 1);
       await page.getByText('dropped.csv · line').waitFor();
       expect(await editorIn(page).inputValue()).toBe('series,velline (uM),activity\n');
       await page.close();

@@ -61,3 +61,13 @@ export async function drawn(page: Page): Promise<void> {
     () => new Promise<void>((done) => requestAnimationFrame(() => requestAnimationFrame(() => done()))),
   );
 }
+
+/** Waits until no colour is on its way any more: even the shortest transition takes its frames, parent by parent. */
+export async function settled(page: Page): Promise<void> {
+  await page.evaluate(async () => {
+    for (let still = 0; still < 3; ) {
+      await new Promise(requestAnimationFrame);
+      still = document.getAnimations().length === 0 ? still + 1 : 0;
+    }
+  });
+}

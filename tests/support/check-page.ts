@@ -56,12 +56,31 @@ export async function paste(page: Page, source: unknown): Promise<void> {
 export const openingOf = (data: PlotData): EnergyWindow => openingWindow(pointsOf(data));
 export const fullOf = (data: PlotData): EnergyWindow => fullWindow(energiesOf(data));
 
-/** What the verdict says of a window that does not hold all points. */
-export function sentenceOnWindow(data: PlotData, { from, to }: EnergyWindow): string {
-  const points = data.series.flatMap(({ assessed }) => assessed.points);
+export interface WindowCounts {
+  onCurve: number;
+  inside: number;
+  below: number;
+  above: number;
+}
+
+/** How many points a window holds, by the assessment. */
+export function countsWithin(data: PlotData, { from, to }: EnergyWindow): WindowCounts {
+  const points = pointsOf(data);
   const inside = points.filter(({ energy }) => energy >= from && energy <= to);
-  const onCurve = inside.filter(({ flag }) => flag === 'on-curve').length;
-  const below = points.filter(({ energy }) => energy < from).length;
-  const above = points.filter(({ energy }) => energy > to).length;
-  return `${onCurve} / ${inside.length} points in it are on the curve; ${below} lie below it, ${above} above.`;
+  return {
+    onCurve: inside.filter(({ flag }) => flag === 'on-curve').length,
+    inside: inside.length,
+    below: points.filter(({ energy }) => energy < from).length,
+    above: points.filter(({ energy }) => energy > to).length,
+  };
+}
+
+/** How many the verdict says that it holds; null where it says that it holds all. */
+export async function countsSaid(page: Page): Promise<WindowCounts | null> {
+  const said = /(\d+) \/ (\d+) points in it[^;]*; (\d+)\D+(\d+)/.exec(
+    (await verdictIn(page).textContent()) ?? '',
+  );
+  if (said === null) return null;
+  const [onCurve, inside, below, above] = said.slice(1).map(Number);
+  return { onCurve, inside, below, above };
 }

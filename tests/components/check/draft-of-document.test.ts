@@ -1,0 +1,30 @@
+import { expect, it } from 'vitest';
+import { formOf } from '@/components/check/csv-draft';
+import { draftOfDocument } from '@/components/check/draft-of-document';
+import { assembleDocument } from '@/lib/documents/assemble-document';
+import { EXAMPLE_TABLE, EXAMPLES } from '@/lib/documents/examples/examples';
+import { readCsvPoints } from '@/lib/documents/read-csv-points';
+import { csvParametersSchema } from '@/schemas/csv-parameters';
+
+const [{ document }] = EXAMPLES;
+const table = readCsvPoints(EXAMPLE_TABLE);
+
+it('fills the form so that the table becomes the document again: parameters, temperature, points', () => {
+  const draft = draftOfDocument(document, table);
+  const made = assembleDocument(table, csvParametersSchema.parse(formOf(draft, table, document.title)));
+  expect(made.temperature).toEqual(document.temperature);
+  made.series.forEach(({ parameters, points, label }, i) => {
+    const original = document.series[i];
+    expect(label).toBe(original.label);
+    expect(parameters.gap).toEqual(original.parameters.gap);
+    expect(parameters.siteClasses[0].binding).toEqual(original.parameters.siteClasses[0].binding);
+    expect(parameters.siteClasses[0].sites).toEqual(original.parameters.siteClasses[0].sites);
+    expect(points).toHaveLength(original.points.length);
+  });
+});
+
+it('leaves a series that the document does not know to be typed', () => {
+  const draft = draftOfDocument({ ...document, series: [] }, table);
+  expect(draft.parameters.gap.value).toBe('');
+  expect(draft.own).toEqual({});
+});
