@@ -8,6 +8,7 @@
 import betainc from '@stdlib/math-base-special-betainc';
 import erfc from '@stdlib/math-base-special-erfc';
 import gammainc from '@stdlib/math-base-special-gammainc';
+import { gammaTail, LARGE_SHAPE } from './gamma-tail';
 
 /** Beyond this many degrees of freedom Student and F are their limits to better than 1e-12. */
 const ENDLESS_DEGREES_OF_FREEDOM = 1e13;
@@ -27,7 +28,9 @@ export function studentTwoSided(t: number, nu: number): number {
 /** P(X > x) of χ² with `degreesOfFreedom` ≥ 1, for x ≥ 0. */
 export function chiSquaredUpper(x: number, degreesOfFreedom: number): number {
   if (x <= 0) return 1;
-  return gammainc(x / 2, degreesOfFreedom / 2, true, true);
+  const shape = degreesOfFreedom / 2;
+  if (shape >= LARGE_SHAPE) return gammaTail(shape, x / 2);
+  return gammainc(x / 2, shape, true, true);
 }
 
 /** P(X > x) of F with m ≥ 1 and nu > 0 degrees of freedom, for x ≥ 0. */
