@@ -17,6 +17,8 @@ export default defineConfig({
           include: ['tests/**/*.test.{ts,tsx}'],
           exclude: ['tests/integration/**', 'tests/browser/**'],
           globalSetup: ['tests/support/build-programs-first.ts'],
+          // A busy machine may take several times what a quiet one does.
+          testTimeout: 40_000,
         },
       },
       {

@@ -1,3 +1,4 @@
+import { notFound } from 'next/navigation';
 import { ExampleCollapse } from '@/components/check/example-collapse';
 import { FlagCounts } from '@/components/check/flag-counts';
 import { AxisFrame } from '@/components/layout/axis-frame';
@@ -9,10 +10,13 @@ import { ActionLink } from '@/components/ui/action-link';
 import { actionStyle } from '@/components/ui/action-style';
 import { formatCount } from '@/components/ui/format-quantity';
 import { assessedExample } from '@/lib/assessments/assessed-example';
+import { VISITOR } from '@/lib/auth/actor';
+import { may } from '@/lib/auth/permissions';
 import { HomeRow } from './home-row';
 
 /** What the place is for, the curve itself, and the way to check data against it. */
 export default function HomePage() {
+  if (!may(VISITOR, 'check-document')) notFound();
   const { document, assessment } = assessedExample();
   const { summary, series } = assessment;
   const window = openingWindow(series.flatMap(({ points }) => points));

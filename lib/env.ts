@@ -1,6 +1,6 @@
 /**
  * The settings, read once from the environment and checked at start. A wrong one is named together with what
- * would be right; nothing else in the code reads `process.env`, build-time NODE_ENV excepted.
+ * would be right. Only what starts or builds the program reads `process.env` besides.
  */
 import { BlockList, isIP } from 'node:net';
 import path from 'node:path';
@@ -65,7 +65,7 @@ export interface Env {
   appUrl: string;
   logLevel: (typeof LOG_LEVELS)[number];
   trustedProxies: BlockList;
-  /** the demonstration: limits ten times higher, listens on this machine only */
+  /** the demonstration: limits ten times higher */
   demo: boolean;
   /** `npm run …` started this process */
   startedByNpm: boolean;

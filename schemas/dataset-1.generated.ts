@@ -307,7 +307,7 @@ export interface Series {
   temperature?: Temperature;
   parameters: Parameters;
   /**
-   * The measured points; at most 20,000 in the whole dataset.
+   * The measured points; at least 1, at most 20,000 in the whole dataset.
    *
    * @maxItems 20000
    */

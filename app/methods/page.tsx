@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { notFound } from 'next/navigation';
 import { AxisFrame } from '@/components/layout/axis-frame';
 import { CollapseSection } from '@/components/methods/collapse-section';
 import { MethodsContents } from '@/components/methods/contents';
@@ -13,6 +14,8 @@ import { SourcesSection } from '@/components/methods/sources-section';
 import { StatementsSection } from '@/components/methods/statements-section';
 import { SymbolsSection } from '@/components/methods/symbols-section';
 import { UncertaintySection } from '@/components/methods/uncertainty-section';
+import { VISITOR } from '@/lib/auth/actor';
+import { may } from '@/lib/auth/permissions';
 
 export const metadata: Metadata = {
   title: 'Methods',
@@ -22,6 +25,7 @@ export const metadata: Metadata = {
 
 /** The equations and the policy. */
 export default function MethodsPage() {
+  if (!may(VISITOR, 'read-methods')) notFound();
   return (
     <AxisFrame
       who={

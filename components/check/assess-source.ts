@@ -27,6 +27,12 @@ interface Prepared {
 
 type Preparation = Prepared | Extract<SourceOutcome, { kind: 'to-mend' }>;
 
+/**
+ * Assesses what was pasted.
+ *
+ * @param draft the form beside a table; null for a document
+ * @throws DOMException where `signal` aborts
+ */
 export async function assessSource(
   source: Source,
   draft: CsvDraft | null,

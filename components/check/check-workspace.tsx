@@ -51,6 +51,8 @@ export function CheckWorkspace() {
   });
 
   const change = (next: Source) => {
+    // An answer that is still on its way is about another text.
+    abort.current?.abort();
     setSource(next);
     setExample(null);
     setOutcome(null);
@@ -64,6 +66,7 @@ export function CheckWorkspace() {
     mutate({ source: next, draft: null, example: slug });
   };
   const openTable = async () => {
+    abort.current?.abort();
     const table = await loadExampleTable();
     setSource({ text: table.text, name: null });
     setDraft(table.draft);
@@ -90,7 +93,9 @@ export function CheckWorkspace() {
     }
   });
   useEffect(() => {
-    if (source !== EMPTY) keepSource({ source, draft });
+    if (source === EMPTY) return;
+    const timer = setTimeout(() => keepSource({ source, draft }), 400);
+    return () => clearTimeout(timer);
   }, [source, draft]);
 
   if (showsResult) {

@@ -1,7 +1,7 @@
 'use client';
 
 import Link from 'next/link';
-import { useRef } from 'react';
+import { useDeferredValue, useRef } from 'react';
 import { AxisFrame } from '@/components/layout/axis-frame';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
@@ -50,8 +50,10 @@ export function SourceView(props: SourceViewProps) {
     onTable,
   } = props;
   const area = useRef<HTMLTextAreaElement>(null);
-  const isTable = source.text.trim() !== '' && kindOf(source) === 'table';
-  const table = isTable ? readCsvPoints(source.text) : null;
+  // A large table is read when the typing pauses, not at every key.
+  const text = useDeferredValue(source.text);
+  const isTable = text.trim() !== '' && kindOf({ ...source, text }) === 'table';
+  const table = isTable ? readCsvPoints(text) : null;
   return (
     <form
       className="flex grow flex-col"

@@ -29,6 +29,7 @@ export interface StatementWords {
   converted?: ReactNode;
 }
 
+/** A gap as stated, its orientation, and its value in kT at the temperature of its series, K. */
 export function gapWords(gap: Gap, temperatureKelvin: number): StatementWords {
   const { valueKT, uKT } = gapToKT(gap, temperatureKelvin);
   const convention = ORIENTATION_WORDS[gap.orientation];

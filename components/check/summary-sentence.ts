@@ -9,7 +9,7 @@ export function sentenceOn(data: PlotData, { window, byLigand }: Look): string {
     byLigand === null
       ? `free energy from ${formatNumber(window.from)} to ${formatNumber(window.to)} kT, beside the master curve`
       : `the concentration of ${data.document.ligands.find(({ id }) => id === byLigand)?.name ?? byLigand}`;
-  return `Activity of ${counted(points, 'point')} in ${counted(data.series.length, 'series', 'series')} against ${against}: ${formatCount(onCurve)} on the curve, ${counted(warning, 'warning')}, ${formatCount(offCurve)} off the curve. The same points stand in the table below.`;
+  return `Activity of ${counted(points, 'point')} in ${counted(data.series.length, 'series', 'series')} against ${against}: ${formatCount(onCurve)} on the curve, ${counted(warning, 'warning')}, ${formatCount(offCurve)} off the curve.`;
 }
 
 function counted(count: number, one: string, many = `${one}s`): string {

@@ -13,6 +13,7 @@ export interface CheckAddress {
   byLigand: string | null;
 }
 
+/** Reads the part of an address behind the path; what it does not understand is null. */
 export function readAddress(search: string): CheckAddress {
   const query = new URLSearchParams(search);
   const example = query.get('example');
@@ -30,6 +31,7 @@ function numberIn(query: URLSearchParams, name: string): number {
   return readNumber(query.get(name) ?? '') ?? Number.NaN;
 }
 
+/** The part of an address behind the path for a result that is shown. */
 export function writeAddress({ example, window, byLigand }: CheckAddress): string {
   const query = new URLSearchParams();
   if (example) query.set('example', example);

@@ -9,6 +9,7 @@ import { describePoint } from './describe-point';
 export const TRAVEL_MILLISECONDS = 700;
 const LEVELS = [0, 0.25, 0.5, 0.75, 1];
 
+/** The option of the chart for a view of the collapse; energies in kT, activities without a unit. */
 export function collapseOption(view: CollapseView): Record<string, unknown> {
   const { heights, colours } = view;
   const rows = rowsByFlag(view);

@@ -16,6 +16,7 @@ export interface ConcentrationAxis {
 const AIR = 0.25;
 const ZERO_GAP = 0.75;
 
+/** The axis that holds every concentration of a ligand in a dataset. */
 export function concentrationAxisOf(data: PlotData, ligand: string): ConcentrationAxis {
   let low = Number.POSITIVE_INFINITY;
   let high = Number.NEGATIVE_INFINITY;

@@ -25,6 +25,7 @@ export interface PointPlace {
   point: number;
 }
 
+/** Joins a document with its assessment, series by series. */
 export function plotDataOf(document: DatasetDocument, assessment: Assessment): PlotData {
   const coloured = document.series.length <= MOST_COLOURED_SERIES;
   return {

@@ -18,6 +18,7 @@ export interface ResponseCurve {
   samples: { place: number; energy: number; expected: number }[];
 }
 
+/** The curves of all series along an axis, one for each set of other conditions; at most 48. */
 export function responseCurves(data: PlotData, axis: ConcentrationAxis): ResponseCurve[] {
   const curves: ResponseCurve[] = [];
   data.series.forEach((series, s) => {

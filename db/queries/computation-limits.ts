@@ -1,4 +1,4 @@
-/** The SQL behind the limits on open computation; the rules themselves are in lib/assessments/limits. */
+/** The SQL behind the limits on open computation; the rules themselves are in lib/assessments/computation-limits.ts. */
 import { randomBytes } from 'node:crypto';
 import { and, eq, gt, lte, sql } from 'drizzle-orm';
 import { readDatabase, type Transaction, write } from '@/db/client';

@@ -1,6 +1,7 @@
 /** The verb behind `POST /api/v1/assessments`: anyone's document in, its assessment out, nothing stored. */
 import type { Actor } from '@/lib/auth/actor';
 import { may } from '@/lib/auth/permissions';
+import { MOST_POINTS } from '@/lib/documents/size-limits';
 import { env } from '@/lib/env';
 import type { Failure } from '@/lib/errors';
 import { log } from '@/lib/log';
@@ -12,9 +13,6 @@ import { type ComputationLimits, computationLimits, type Quota } from './computa
 
 /** The shortest point, `{"ligands":{},"activity":0},`, has 28 bytes: a body cannot hold more points than that allows. */
 const LEAST_BYTES_PER_POINT = 28;
-
-/** More than a valid document can have. */
-const MOST_POINTS = 20_000;
 
 /** Seconds after which a caller may try again when the queue is full. */
 const BUSY_RETRY_SECONDS = 2;

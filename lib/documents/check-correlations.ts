@@ -19,11 +19,12 @@ export const checkCorrelations: MeaningCheck = (document, report) => {
     const place = `${base}/parameters/correlations`;
     const pairs = resolvePairs(parameters, parameters.correlations, place, report);
     const own = new CorrelationGraph();
-    for (const { a, b, r, pointer } of pairs) {
-      own.add(a.name, b.name, r);
+    for (const pair of pairs) {
+      const { a, b, r } = pair;
+      const [one, other] = [keyOf(a, base), keyOf(b, base)];
+      if (one !== other) own.add(one, other, r);
       sharesQuantities ||= a.statement.sharedAs !== undefined || b.statement.sharedAs !== undefined;
-      if (compareShared(sharedPairs, a, b, r, pointer, report))
-        dataset.add(keyOf(a, base), keyOf(b, base), r);
+      if (compareShared(sharedPairs, pair, base, report)) dataset.add(one, other, r);
     }
     const verdict = own.canHold();
     if (verdict === 'no') report(place, IMPOSSIBLE);
@@ -90,19 +91,20 @@ function keyOf({ name, statement }: StatedQuantity, base: string): string {
   return statement.sharedAs === undefined ? `${base} ${name}` : `shared ${statement.sharedAs}`;
 }
 
+function nameOf({ name, statement }: StatedQuantity): string {
+  return statement.sharedAs === undefined ? name : `the shared quantity ${quote(statement.sharedAs)}`;
+}
+
 /** Whether this correlation is new to the dataset. One that disagrees with an earlier one is reported. */
 function compareShared(
   known: Map<string, { r: number; pointer: string }>,
-  a: StatedQuantity,
-  b: StatedQuantity,
-  r: number,
-  pointer: string,
+  { a, b, r, pointer }: Pair,
+  base: string,
   report: Report,
 ): boolean {
-  const [one, other] = [a.statement.sharedAs, b.statement.sharedAs];
-  if (one === undefined || other === undefined) return true;
+  const [one, other] = [keyOf(a, base), keyOf(b, base)];
   if (one === other) {
-    if (r !== 1) report(`${pointer}/r`, `${quote(one)} is one and the same quantity, so r must be 1`);
+    if (r !== 1) report(`${pointer}/r`, `${nameOf(a)} is one and the same quantity, so r must be 1`);
     return false;
   }
   const key = JSON.stringify(one < other ? [one, other] : [other, one]);
@@ -114,7 +116,7 @@ function compareShared(
   if (earlier.r !== r)
     report(
       `${pointer}/r`,
-      `the shared quantities ${quote(one)} and ${quote(other)} have r = ${earlier.r} at ${earlier.pointer}; it must be the same here`,
+      `${nameOf(a)} and ${nameOf(b)} have r = ${earlier.r} at ${earlier.pointer}; it must be the same here`,
     );
   return false;
 }

@@ -59,7 +59,14 @@ function sortCells(
   cells.forEach((cell, index) => {
     const text = cell.trim();
     const column = columns[index];
-    if (text === '') return;
+    if (text === '') {
+      if (column?.holds === 'ligand')
+        complain(
+          index + 1,
+          `the concentration of ${column.ligand.name} must stand here; 0 where none was added`,
+        );
+      return;
+    }
     if (column === undefined) complain(index + 1, sayNoHeading(text, decimalComma));
     else if (column.holds === 'series') row.series = text;
     else if (column.holds !== 'nothing') {

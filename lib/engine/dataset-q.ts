@@ -28,6 +28,12 @@ interface Block {
   indices: number[];
 }
 
+/**
+ * Q of a dataset.
+ *
+ * @param all its series, each with its model and table
+ * @returns Q, degrees of freedom, upper tail (null where none exists) and the RMS of all z
+ */
 export function datasetQ(all: readonly ScoredSeries[]): QStatistic {
   const quantities = indexSharedQuantities(all.map(({ model, fittedHere }) => (fittedHere ? null : model)));
   const mixing = sharedFactor(quantities);

@@ -39,7 +39,11 @@ export function deriveQuantities(
     const direction = response.direction();
     const saturation = response.energyAtSaturation();
     const name = ligand.name ?? ligand.id;
-    if (direction === 0) return;
+    if (direction === 0) {
+      if (response.binds())
+        notes.push(missing(`${name} binds both states alike: the activity does not change with it.`));
+      return;
+    }
     if (saturation === null) {
       notes.push(
         missing(

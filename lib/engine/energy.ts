@@ -23,6 +23,7 @@ export interface SiteState {
   displacement: Float64Array;
 }
 
+/** An empty state of the size that a model needs; everything in it is 0. */
 export function createSiteState(model: SeriesModel): SiteState {
   return {
     logRatio: new Float64Array(model.classCount),

@@ -13,6 +13,7 @@ import type { SeriesModel } from './series-model';
 const MONOTONY_STEPS = 400;
 const BEYOND_CONSTANTS = 1e4;
 
+/** One ligand's response; holds one state, which every question overwrites. */
 export class LigandResponse {
   private readonly state: SiteState;
   private readonly concentrations: Float64Array;
@@ -33,6 +34,11 @@ export class LigandResponse {
   private inverse(s: number): { inactive: number; active: number } {
     const at = s * this.model.ligandCount + this.ligand;
     return { inactive: this.model.inverseInactive[at], active: this.model.inverseActive[at] };
+  }
+
+  /** Whether any site class binds the ligand at all. */
+  binds(): boolean {
+    return this.bindingClasses.length > 0;
   }
 
   /** Sites at concentration c ≥ 0, in the ligand's unit. The state is overwritten by the next call. */

@@ -8,6 +8,7 @@
  */
 import { choleskyOfUnitPlus, solveLower, solveLowerTransposed } from './linear-algebra';
 
+/** C = D + W·Wᵀ, factored once and asked often. */
 export class LowRankNoise {
   private readonly count: number;
   /** lower Cholesky factor of M, k × k */

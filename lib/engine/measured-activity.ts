@@ -19,6 +19,11 @@ export interface MeasuredActivity {
   degreesOfFreedom: number;
 }
 
+/**
+ * Measured activities of the points of one series, m of them, in their order.
+ *
+ * @param points each with `activity` (and `u`), or with two or more `replicates`
+ */
 export function measureActivity(points: readonly PointInput[]): MeasuredActivity {
   const activity = new Float64Array(points.length);
   const activityU = new Float64Array(points.length);

@@ -1,5 +1,6 @@
 /** What a reader has to know of a series before trusting its figures, in sentences. */
 import type { Note } from './assessment';
+import { POLICY } from './flags';
 import type { DatasetInput, ParametersInput, SeriesInput } from './inputs';
 import type { MeasuredActivity } from './measured-activity';
 import { convertConcentration } from './units';
@@ -52,7 +53,7 @@ function noteAssumedUncertainty({ uncertainty }: MeasuredActivity): Note[] {
   return [
     {
       code: 'assumed-uncertainty',
-      detail: `${counted(points.length, 'point states', 'points state')} neither an uncertainty nor replicates: 0.02 is assumed, and the series gets no p.`,
+      detail: `${counted(points.length, 'point states', 'points state')} neither an uncertainty nor replicates: ${POLICY.assumedActivityU} is assumed, and the series gets no p.`,
       points,
     },
   ];

@@ -1,5 +1,7 @@
 /** What all route handlers of the API share: errors that nobody expected, methods that are not there, reads with an ETag. */
 import { createHash } from 'node:crypto';
+import { VISITOR } from '@/lib/auth/actor';
+import { type Action, may } from '@/lib/auth/permissions';
 import { problemResponse } from '@/lib/errors';
 import { log } from '@/lib/log';
 
@@ -18,6 +20,11 @@ export function answering(handler: Handler): Handler {
       return problemResponse({ code: 'unexpected' });
     }
   };
+}
+
+/** The handler, for whom the permission table lets in. Nobody signs in yet, so everybody is a visitor. */
+export function allowing(action: Action, handler: Handler): Handler {
+  return (request) => (may(VISITOR, action) ? handler(request) : problemResponse({ code: 'forbidden' }));
 }
 
 /** A handler for the methods that an address does not take: 405 with those that it does. */

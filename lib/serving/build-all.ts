@@ -11,10 +11,13 @@ const SOURCES = [
 ];
 
 const STAMP = path.join('.build', 'stamp');
+/** Stands where the pages are built whole. */
+const PAGES = path.join('.next', 'BUILD_ID');
 
 /** Builds where the sources are not those of the last build. */
 export async function buildIfStale(): Promise<void> {
-  if ((await readFile(STAMP, 'utf8').catch(() => '')) === (await sourcesHash())) return;
+  const built = await Promise.all([STAMP, PAGES].map((file) => readFile(file, 'utf8').catch(() => '')));
+  if (built[1] !== '' && built[0] === (await sourcesHash())) return;
   await buildAll();
 }
 

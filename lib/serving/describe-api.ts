@@ -86,6 +86,7 @@ function registerAssessments(registry: Registry): void {
       ...problems(
         'malformed-json',
         'incomplete-body',
+        'forbidden',
         'cross-site',
         'body-too-large',
         'not-json-type',
@@ -96,6 +97,7 @@ function registerAssessments(registry: Registry): void {
         'unexpected',
         'busy',
         'took-too-long',
+        'unavailable',
       ),
     },
   });

@@ -33,7 +33,7 @@ export async function startServer({ development }: { development: boolean }): Pr
   });
   const env = checkEnvOrExit();
   const server = createServer();
-  const [handle] = await Promise.all([prepareNext(server, env, development), applyMigrations()]);
+  const [handle] = await Promise.all([prepareNext(server, env, development), prepareDatabase(env)]);
   answerWith(server, handle, env);
   await listen(server, env);
   stopOnSignal(server, async () => {
@@ -41,6 +41,20 @@ export async function startServer({ development }: { development: boolean }): Pr
     await closeDatabase();
   });
   announce(server, env);
+}
+
+async function prepareDatabase({ databaseUrl }: Env): Promise<void> {
+  try {
+    await applyMigrations();
+  } catch (error) {
+    log().error({ err: error }, 'the database could not be prepared');
+    const [, scheme = ''] = /^(\w+:)/.exec(databaseUrl) ?? [];
+    const place = scheme === 'file:' ? databaseUrl.slice(scheme.length) : `the ${scheme} address`;
+    process.stderr.write(
+      `The database at ${place} cannot be opened or brought up to date. CURVEKEEP_DATA_DIR must be a folder that can be written to, DATABASE_URL a libSQL database.\n`,
+    );
+    process.exit(1);
+  }
 }
 
 async function prepareNext(server: Server, env: Env, development: boolean): Promise<NextHandler> {

@@ -82,7 +82,9 @@ describeInBrowser('the collapse of the page', ({ newPage, url }) => {
           });
       }
 
-      for (const point of lonelyPoints(data, window, box).slice(0, 3)) {
+      const lonely = lonelyPoints(data, window, box).slice(0, 3);
+      expect(lonely.length).toBeGreaterThan(0);
+      for (const point of lonely) {
         const middle = await middleOfColour(page, `--series-${point.series + 1}`, point);
         expect(middle).not.toBeNull();
         expect(Math.abs((middle?.x ?? Number.NaN) - point.x)).toBeLessThan(1);

@@ -9,7 +9,7 @@ const window = { from: -10, to: 4 };
 it('says in one sentence what the collapse shows', () => {
   const data = plottedExample('thousand-fold');
   expect(sentenceOn(data, { window, byLigand: null })).toBe(
-    'Activity of 56 points in 4 series against free energy from −10 to 4 kT, beside the master curve: 46 on the curve, 0 warnings, 10 off the curve. The same points stand in the table below.',
+    'Activity of 56 points in 4 series against free energy from −10 to 4 kT, beside the master curve: 46 on the curve, 0 warnings, 10 off the curve.',
   );
   expect(sentenceOn(data, { window, byLigand: 'velline' })).toContain(
     'against the concentration of velline:',

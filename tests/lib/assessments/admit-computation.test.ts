@@ -81,6 +81,6 @@ describe('admitting computations', () => {
       if (admission.admitted) await endComputation(admission.lease, generous, { computedPoints: 1 });
     }
     // A hundred pairs; the bound leaves room for a loaded machine.
-    expect((performance.now() - started) / 100).toBeLessThan(25);
+    expect((performance.now() - started) / 100).toBeLessThan(100);
   });
 });

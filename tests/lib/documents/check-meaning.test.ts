@@ -189,9 +189,9 @@ describe('what is wrong', () => {
     ]);
   });
 
-  it('names a dataset without points, and one with too many over all series', () => {
+  it('names a series without points, and one with too many over all series', () => {
     expect(errorsOf({ [`${SERIES}/points`]: [] })).toEqual([
-      { pointer: '/series', detail: 'a dataset needs at least one point' },
+      { pointer: `${SERIES}/points`, detail: 'a series needs at least one point' },
     ]);
     const [one] = contractDocument().series;
     const many = ['a', 'b'].map((id) => ({
@@ -295,7 +295,7 @@ describe('shared quantities', () => {
       {
         pointer: '/series/1/parameters/correlations/0/r',
         detail:
-          'the shared quantities “gap” and “sites” have r = 0.9 at /series/0/parameters/correlations/0; it must be the same here',
+          'the shared quantity “gap” and the shared quantity “sites” have r = 0.9 at /series/0/parameters/correlations/0; it must be the same here',
       },
     ]);
   });

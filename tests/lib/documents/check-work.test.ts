@@ -72,3 +72,38 @@ it.each([
   (statement as { u: number }).u = u;
   expect(errorsOf(document)).toEqual([{ pointer, detail }]);
 });
+
+it('refuses a series without points, and an energy whose size no arithmetic can carry', () => {
+  const document = contractDocument();
+  document.series[0].points = [];
+  expect(errorsOf(document)).toContainEqual(expect.objectContaining({ pointer: '/series/0/points' }));
+  const steep = contractDocument();
+  const [entry] = steep.series[0].parameters.modulation ?? [];
+  entry.slope.value = 1.5e308;
+  expect(errorsOf(steep)).toContainEqual(
+    expect.objectContaining({ pointer: '/series/0/parameters/modulation/0/slope/value' }),
+  );
+});
+
+it('refuses two correlations of a quantity with what is one and the same under two names', () => {
+  const document = contractDocument();
+  const { parameters } = document.series[0];
+  const [main] = parameters.siteClasses;
+  main.sites.u = 0.1;
+  parameters.siteClasses = [
+    { ...main, sites: { ...main.sites, sharedAs: 'sites' } },
+    { ...main, id: 'second', sites: { ...main.sites, sharedAs: 'sites' } },
+  ];
+  parameters.correlations = [
+    { a: 'gap', b: 'main/sites', r: 0.6 },
+    { a: 'gap', b: 'second/sites', r: -0.6 },
+  ];
+  expect(errorsOf(document)).toEqual([
+    {
+      pointer: '/series/0/parameters/correlations/1/r',
+      detail: expect.stringContaining(
+        'have r = 0.6 at /series/0/parameters/correlations/0; it must be the same here',
+      ),
+    },
+  ]);
+});

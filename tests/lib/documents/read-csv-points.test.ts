@@ -101,6 +101,7 @@ describe('what is wrong with a table', () => {
     ],
     [',1,0.4,,,', 2, 1, 'the name of the series must stand here'],
     ['wt,1,,,,', 2, 3, 'a measured activity must stand here'],
+    ['wt,,0.4,,,', 2, 2, 'the concentration of velline must stand here; 0 where none was added'],
     ['wt,1,0.4,,0.4,0.5', 2, 3, 'a row takes an activity or replicates, not both'],
     ['wt,1,,,0.4,', 2, 5, 'two or more replicates must stand here; a single one is an activity'],
     ['wt,1,,0.1,0.4,0.5', 2, 4, 'u belongs to an activity; leave it empty beside replicates'],

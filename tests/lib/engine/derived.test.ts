@@ -77,7 +77,11 @@ describe('quantities that do not exist', () => {
     expectClose(derived[0].halfActivity?.value ?? null, 10 * (Math.exp(1) - 1), 1e-13);
   });
   it('equal constants: the ligand does nothing and is not listed', () => {
-    expect(assessed(2, siteClass(2, 10, 10)).derived).toEqual([]);
+    const { derived, notes } = assessed(2, siteClass(2, 10, 10));
+    expect(derived).toEqual([]);
+    expect(notes).toEqual([
+      expect.objectContaining({ detail: expect.stringContaining('binds both states alike') }),
+    ]);
   });
   it('classes that pull both ways: limits stand, the midpoint does not', () => {
     const { derived, notes } = assessed(
