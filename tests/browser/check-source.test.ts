@@ -240,6 +240,7 @@ describeInBrowser('what is given to the page', ({ newPage, url }) => {
       const page = await open();
       await paste(page, 'series,velline (uM),activity,u\nwt,0,0.9,0.02\n');
       const orientation = page.getByLabel('orientation of the energy gap');
+      await orientation.waitFor();
       expect(await orientation.locator('option').allTextContents()).toEqual([
         'inactive − active',
         'active − inactive',
