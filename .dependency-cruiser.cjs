@@ -50,7 +50,18 @@ module.exports = {
       from: { path: '^lib/engine/' },
       to: { path: '.', pathNot: '^lib/engine/|^node_modules/@stdlib/' },
     },
-    only('db', { path: '^db/' }, '^(db|schemas)/|^lib/env', 'db: Drizzle, schemas, settings'),
+    only(
+      'db',
+      { path: '^db/', pathNot: '^db/seed/' },
+      '^(db|schemas)/|^lib/env',
+      'db: Drizzle, schemas, settings',
+    ),
+    only(
+      'seed',
+      { path: '^db/seed/' },
+      '^(db|lib|schemas)/',
+      'the demonstration scenario writes through what the application writes with: db, lib, schemas',
+    ),
     only('storage', { path: '^storage/' }, '^storage/|^lib/env', 'storage: its SDK, settings'),
     only(
       'schemas',

@@ -5,10 +5,14 @@ import { SiteFooter } from '@/components/layout/site-footer';
 import { SiteHeader } from '@/components/layout/site-header';
 import { SkipLink } from '@/components/layout/skip-link';
 import { parseTheme, THEME_COOKIE } from '@/components/layout/theme';
+import { type Actor, VISITOR } from '@/lib/auth/actor';
+import { actorOfPage } from '@/lib/auth/current-actor';
+import { log } from '@/lib/log';
 import { fontClasses } from './fonts';
 import './globals.css';
 import { Providers } from './providers';
 import { setTheme } from './set-theme';
+import { signOutAction } from './sign-in/sign-out-action';
 
 export const metadata: Metadata = {
   title: { default: 'Curvekeep: one master curve for allosteric data', template: '%s · Curvekeep' },
@@ -26,11 +30,12 @@ export const viewport: Viewport = {
 /** Reading the cookie makes every page dynamic, which the nonce of the content policy needs. */
 export default async function RootLayout({ children }: { children: ReactNode }) {
   const theme = parseTheme((await cookies()).get(THEME_COOKIE)?.value);
+  const actor = await actorOfHeader();
   return (
     <html lang="en-GB" className={fontClasses} data-theme={theme === 'system' ? undefined : theme}>
       <body className="flex flex-col">
         <SkipLink />
-        <SiteHeader />
+        <SiteHeader actor={actor} signOut={signOutAction} />
         <Providers>
           <main id="main" tabIndex={-1} className="flex grow flex-col outline-none">
             {children}
@@ -40,4 +45,14 @@ export default async function RootLayout({ children }: { children: ReactNode }) 
       </body>
     </html>
   );
+}
+
+/** Without its database a page still has its header, a visitor's; the page itself says what is wrong. */
+async function actorOfHeader(): Promise<Actor> {
+  try {
+    return await actorOfPage();
+  } catch (error) {
+    log().error({ err: error }, 'who is asking could not be found out');
+    return VISITOR;
+  }
 }

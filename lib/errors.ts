@@ -8,10 +8,25 @@ interface ErrorKind {
 }
 
 export const ERRORS = {
+  'bad-parameter': {
+    status: 400,
+    title: 'A parameter of the address is not right',
+    meaning: '`detail` names the parameter and says what would be right.',
+  },
+  'bad-header': {
+    status: 400,
+    title: 'A header is not right',
+    meaning: '`detail` names the header and says what would be right.',
+  },
   'malformed-json': {
     status: 400,
     title: 'The body is not JSON',
     meaning: 'The body could not be read as JSON; `line` and `column` say where reading stopped.',
+  },
+  unauthenticated: {
+    status: 401,
+    title: 'Sign in first',
+    meaning: 'This needs a session or a laboratory token.',
   },
   'cross-site': {
     status: 403,
@@ -25,6 +40,26 @@ export const ERRORS = {
     title: 'Method not allowed',
     meaning: 'The address exists, but not for this method; the Allow header lists those that it takes.',
   },
+  'not-acceptable': {
+    status: 406,
+    title: 'None of these forms',
+    meaning: 'This cannot be sent in any of the forms that the Accept header asks for.',
+  },
+  conflict: {
+    status: 409,
+    title: 'Not in this state',
+    meaning: 'The state in which this is does not allow it; load it again to see what changed.',
+  },
+  withdrawn: {
+    status: 410,
+    title: 'The dataset was withdrawn',
+    meaning: 'Its data are no longer given out; its metadata stay, with the reason and the date.',
+  },
+  stale: {
+    status: 412,
+    title: 'Changed by somebody else meanwhile',
+    meaning: 'If-Match names another version than the present one; load it again and repeat the change.',
+  },
   'incomplete-body': {
     status: 400,
     title: 'The body did not arrive whole',
@@ -35,6 +70,11 @@ export const ERRORS = {
     title: 'The body is too large',
     meaning: 'A document may have at most 8 MiB (8,388,608 bytes).',
   },
+  'file-too-large': {
+    status: 413,
+    title: 'The file is too large',
+    meaning: 'A file may have at most 100 MiB (104,857,600 bytes).',
+  },
   'not-json-type': {
     status: 415,
     title: 'The body must be application/json',
@@ -44,6 +84,31 @@ export const ERRORS = {
     status: 422,
     title: 'The document is not valid',
     meaning: '`errors` lists everything that is wrong, each with its place and what would be right.',
+  },
+  'invalid-input': {
+    status: 422,
+    title: 'Something is not filled in right',
+    meaning: '`errors` lists what is wrong, each with its place and what would be right.',
+  },
+  'choose-laboratory': {
+    status: 422,
+    title: 'Which laboratory?',
+    meaning: 'You belong to several laboratories; name the one that deposits as ?lab= in the address.',
+  },
+  'digest-mismatch': {
+    status: 422,
+    title: 'The file arrived changed',
+    meaning: 'Its SHA-256 is not the one that was declared with it; nothing was kept. Send it again.',
+  },
+  'idempotency-mismatch': {
+    status: 422,
+    title: 'The key was used for something else',
+    meaning: 'An Idempotency-Key belongs to one body; take a new key for another one.',
+  },
+  'precondition-required': {
+    status: 428,
+    title: 'If-Match is needed',
+    meaning: 'Send the ETag that you last loaded as If-Match, so that nobody else’s change is lost.',
   },
   'too-many-calls': {
     status: 429,
@@ -91,6 +156,25 @@ export interface Failure {
   members?: Pick<Problem, 'line' | 'column' | 'errors'>;
 }
 
+/** What a verb comes to where it fails. */
+export interface Failed {
+  ok: false;
+  failure: Failure;
+  /** the permission table said no to somebody; goes on the audit trail */
+  refused?: true;
+}
+
+/** What a verb comes to. */
+export type Outcome<T> = ({ ok: true } & T) | Failed;
+
+/** The outcome of a verb that failed in that way. */
+export function failed(code: ErrorCode, detail?: string, members?: Failure['members']): Failed {
+  return {
+    ok: false,
+    failure: { code, ...(detail ? { detail } : {}), ...(members ? { members } : {}) },
+  };
+}
+
 /** Whether a text is one of the codes. */
 export function isErrorCode(text: string): text is ErrorCode {
   return Object.hasOwn(ERRORS, text);
@@ -110,6 +194,8 @@ export function problemResponse(failure: Failure, headers: Record<string, string
     headers: {
       'Content-Type': 'application/problem+json',
       'Cache-Control': 'no-store',
+      // RFC 9110, 11.6.1: a 401 says how to identify oneself.
+      ...(problem.status === 401 ? { 'WWW-Authenticate': 'Bearer realm="Curvekeep"' } : {}),
       ...headers,
     },
   });

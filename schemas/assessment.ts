@@ -64,7 +64,7 @@ const qStatistic = {
   rmsZ: z.number(),
 };
 
-const seriesAssessmentSchema = z
+export const seriesAssessmentSchema = z
   .strictObject({
     ...qStatistic,
     id: z.string(),

@@ -8,6 +8,7 @@ export const healthSchema = z
   .strictObject({
     status: z.enum(['ok', 'degraded']),
     database: partHealthSchema,
+    storage: partHealthSchema,
     computation: partHealthSchema,
   })
   .meta({ id: 'Health' });

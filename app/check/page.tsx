@@ -1,7 +1,7 @@
 import type { Metadata } from 'next';
-import { notFound } from 'next/navigation';
 import { CheckWorkspace } from '@/components/check/check-workspace';
 import { VISITOR } from '@/lib/auth/actor';
+import { actorOfPage } from '@/lib/auth/current-actor';
 import { may } from '@/lib/auth/permissions';
 
 export const metadata: Metadata = {
@@ -11,7 +11,15 @@ export const metadata: Metadata = {
 };
 
 /** Paste or drop a document or a table, see its assessment; nothing is stored, nobody signs in. */
-export default function CheckPage() {
-  if (!may(VISITOR, 'check-document')) notFound();
-  return <CheckWorkspace />;
+export default async function CheckPage() {
+  return <CheckWorkspace labs={await depositingLabs()} />;
+}
+
+/** The laboratories that the reader may keep a draft for. Without the database nobody is known, and data are checked. */
+async function depositingLabs(): Promise<{ slug: string; name: string }[]> {
+  const actor = await actorOfPage().catch(() => VISITOR);
+  if (actor.kind !== 'person') return [];
+  return actor.memberships
+    .filter(({ labId }) => may(actor, 'create-deposit', { labId }))
+    .map(({ labSlug, labName }) => ({ slug: labSlug, name: labName }));
 }

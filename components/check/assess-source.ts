@@ -43,6 +43,17 @@ export async function assessSource(
   return 'kind' in prepared ? prepared : send(prepared, signal);
 }
 
+export type SourceDocument = { kind: 'document'; text: string } | Extract<SourceOutcome, { kind: 'to-mend' }>;
+
+/** The document that a source is, as it stands, or that a table and its form make. */
+export function documentOf(source: Source, draft: CsvDraft | null): SourceDocument {
+  if (kindOf(source) === 'document') return { kind: 'document', text: source.text };
+  const prepared = prepareTable(source, draft);
+  return 'kind' in prepared
+    ? prepared
+    : { kind: 'document', text: JSON.stringify(prepared.document, null, 2) };
+}
+
 /** The server judges the text as it stands, so that its place of a slip is that of the text. */
 async function assessText(text: string, signal: AbortSignal): Promise<SourceOutcome> {
   const answer = await ask(text, signal);

@@ -7,9 +7,9 @@ import { ScrollingCell } from '@/components/layout/scrolling-cell';
 import { CollapsePanel } from '@/components/plots/collapse-panel';
 import { type EnergyWindow, fullWindow } from '@/components/plots/energy-window';
 import { energiesOf, type PlotData } from '@/components/plots/plot-data';
+import { RowHeads } from '@/components/plots/row-figures';
 import { useSize } from '@/components/plots/use-size';
 import { WindowRuler } from '@/components/plots/window-ruler';
-import { MathSymbol } from '@/components/ui/math-symbol';
 import { CollapseSwitch } from './collapse-switch';
 import { PointTable } from './point-table';
 import { SeriesRow } from './series-row';
@@ -29,10 +29,24 @@ interface AssessedViewProps {
   onLook: (look: Look) => void;
   /** above the statements: the dataset's title and what can be done with it */
   head: ReactNode;
+  /** above the verdict: where the dataset is on its way, and what can be decided about it */
+  aside?: ReactNode;
+  /** in place of the plot and the table while the points are on their way */
+  pending?: ReactNode;
+  /** whether the table begins with the flagged points */
+  flaggedFirst?: boolean;
 }
 
 /** An assessed dataset in the three columns: statements, collapse on the axis, verdict; a strip a series below. */
-export function AssessedView({ data, look, onLook, head }: AssessedViewProps) {
+export function AssessedView({
+  data,
+  look,
+  onLook,
+  head,
+  aside,
+  pending = null,
+  flaggedFirst = false,
+}: AssessedViewProps) {
   const column = useRef<HTMLDivElement>(null);
   const { width } = useSize(column);
   const [chosen, setChosen] = useState(0);
@@ -59,16 +73,18 @@ export function AssessedView({ data, look, onLook, head }: AssessedViewProps) {
         axis={
           <div ref={column} className="flex h-full flex-col">
             <CollapseSwitch data={data} byLigand={look.byLigand} onChange={turn} />
-            <CollapsePanel
-              data={data}
-              window={look.window}
-              byLigand={look.byLigand}
-              ligand={look.byLigand ?? lastLigand ?? data.document.ligands[0]?.id ?? null}
-              lit={lit}
-              sentence={sentenceOn(data, look)}
-              onPoint={(place) => setPointed(place?.series ?? null)}
-              onChoose={(place) => setChosen(place.series)}
-            />
+            {pending ?? (
+              <CollapsePanel
+                data={data}
+                window={look.window}
+                byLigand={look.byLigand}
+                ligand={look.byLigand ?? lastLigand ?? data.document.ligands[0]?.id ?? null}
+                lit={lit}
+                sentence={sentenceOn(data, look)}
+                onPoint={(place) => setPointed(place?.series ?? null)}
+                onChoose={(place) => setChosen(place.series)}
+              />
+            )}
             <div className="border-ink border-y lg:hidden">
               <WindowRuler window={look.window} full={full} onChange={setWindow} />
             </div>
@@ -76,6 +92,7 @@ export function AssessedView({ data, look, onLook, head }: AssessedViewProps) {
         }
         verdict={
           <ScrollingCell label="Verdict">
+            {aside}
             <Verdict data={data} window={look.window} full={full} onWindow={setWindow} />
           </ScrollingCell>
         }
@@ -103,22 +120,8 @@ export function AssessedView({ data, look, onLook, head }: AssessedViewProps) {
         </ul>
       </AxisFrame>
       <div className="page-width">
-        <PointTable data={data} window={look.window} />
+        {pending ? null : <PointTable data={data} window={look.window} flaggedFirst={flaggedFirst} />}
       </div>
     </>
-  );
-}
-
-function RowHeads() {
-  return (
-    <div className="grid h-full grid-cols-[auto_1fr_1fr] items-center gap-2 text-sm text-soft">
-      <span className="min-w-14 whitespace-nowrap">on curve</span>
-      <span className="text-right">
-        RMS <MathSymbol>z</MathSymbol>
-      </span>
-      <span className="text-right">
-        <MathSymbol>p</MathSymbol>
-      </span>
-    </div>
   );
 }

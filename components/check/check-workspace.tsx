@@ -2,6 +2,7 @@
 
 import { useMutation } from '@tanstack/react-query';
 import { useEffect, useRef, useState } from 'react';
+import type { DepositingLab } from '@/components/deposits/lab-choice';
 import { openingWindow } from '@/components/plots/energy-window';
 import { type PlotData, pointsOf } from '@/components/plots/plot-data';
 import { readCsvPoints } from '@/lib/documents/read-csv-points';
@@ -10,6 +11,7 @@ import { AssessedView, type Look } from './assessed-view';
 import { type CsvDraft, draftFor } from './csv-draft';
 import { DatasetHead } from './dataset-head';
 import { type ExampleSlug, loadExample, loadExampleTable } from './example-words';
+import { KeepDraft } from './keep-draft';
 import { keepSource, keptSource } from './kept-source';
 import { kindOf, type Source } from './read-source';
 import { SourceView } from './source-view';
@@ -23,8 +25,13 @@ interface Job {
   example: ExampleSlug | null;
 }
 
+interface CheckWorkspaceProps {
+  /** the laboratories that the reader may keep a draft for; none for a visitor */
+  labs?: readonly DepositingLab[];
+}
+
 /** The page on which data are checked: first what is to be checked, then what it amounts to. */
-export function CheckWorkspace() {
+export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
   const [source, setSource] = useState<Source>(EMPTY);
   const [draft, setDraft] = useState<CsvDraft | null>(null);
   const [example, setExample] = useState<ExampleSlug | null>(null);
@@ -74,6 +81,17 @@ export function CheckWorkspace() {
     setOutcome(null);
   };
 
+  const keep = (
+    <KeepDraft
+      labs={labs}
+      source={source}
+      draft={draft}
+      onToMend={(found) => {
+        setOutcome(found);
+        setEditing(true);
+      }}
+    />
+  );
   const showsResult = !editing && data !== null && look !== null;
   useAddress(
     showsResult ? { example, window: changedWindow(data, look), byLigand: look.byLigand } : null,
@@ -104,7 +122,9 @@ export function CheckWorkspace() {
         data={data}
         look={look}
         onLook={setLook}
-        head={<DatasetHead data={data} invented={example !== null} onEdit={() => setEditing(true)} />}
+        head={
+          <DatasetHead data={data} invented={example !== null} onEdit={() => setEditing(true)} keep={keep} />
+        }
       />
     );
   }
@@ -122,6 +142,7 @@ export function CheckWorkspace() {
       onExample={(slug) => void open(slug)}
       onTable={() => void openTable()}
       onResult={() => setEditing(false)}
+      keep={keep}
     />
   );
 }

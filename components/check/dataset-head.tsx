@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import type { PlotData } from '@/components/plots/plot-data';
 import { Button } from '@/components/ui/button';
 import { Disclosure } from '@/components/ui/disclosure';
@@ -8,10 +9,12 @@ interface DatasetHeadProps {
   data: PlotData;
   invented: boolean;
   onEdit: () => void;
+  /** the way to a draft, for those who may make one */
+  keep?: ReactNode;
 }
 
 /** The dataset's title, and what can be done with it. */
-export function DatasetHead({ data, invented, onEdit }: DatasetHeadProps) {
+export function DatasetHead({ data, invented, onEdit, keep }: DatasetHeadProps) {
   const { document, assessment } = data;
   const assay = [document.assay.readout, document.assay.conditions].filter((words) => words !== NOT_STATED);
   return (
@@ -25,6 +28,7 @@ export function DatasetHead({ data, invented, onEdit }: DatasetHeadProps) {
           Save assessment
         </Button>
       </p>
+      {keep}
       {document.abstract ? (
         <Disclosure className="mt-2" summary="Abstract">
           <p className="text-sm">{document.abstract}</p>

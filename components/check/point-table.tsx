@@ -4,36 +4,44 @@ import { useState } from 'react';
 import { type EnergyWindow, isInside } from '@/components/plots/energy-window';
 import { FlagMark } from '@/components/plots/flag-mark';
 import { concentrationAt, FLAG_WORDS, type PlotData, pointsOf } from '@/components/plots/plot-data';
-import { Button } from '@/components/ui/button';
 import { type DataColumn, DataTable } from '@/components/ui/data-table';
-import { formatCount, formatNumber, formatPValue, formatScore } from '@/components/ui/format-quantity';
+import { formatNumber, formatPValue, formatScore } from '@/components/ui/format-quantity';
 import { MathSymbol } from '@/components/ui/math-symbol';
+import { Pager, pagesOf } from '@/components/ui/pager';
 import { Quantity } from '@/components/ui/quantity';
 import { SelectField } from '@/components/ui/select-field';
 import { unitLabel } from '@/components/ui/unit-label';
-import type { Flag } from '@/lib/engine/assessment';
-import { type PointTableRow, pointRows } from './point-rows';
+import { type FlagChoice, type PointOrder, type PointTableRow, pointRows } from './point-rows';
 
 const ROWS_A_PAGE = 25;
 
 interface PointTableProps {
   data: PlotData;
   window: EnergyWindow;
+  /** begin with the warnings and off-curve points, the furthest first */
+  flaggedFirst?: boolean;
 }
 
+const ORDERS: { value: PointOrder; label: string }[] = [
+  { value: 'measured', label: 'as measured' },
+  { value: 'miss', label: 'furthest off first' },
+  { value: 'energy', label: 'lowest energy first' },
+];
+
 /** The points of all charts on the page as a table, a page at a time. */
-export function PointTable({ data, window }: PointTableProps) {
+export function PointTable({ data, window, flaggedFirst = false }: PointTableProps) {
   const [series, setSeries] = useState('all');
-  const [flag, setFlag] = useState('all');
+  const [flag, setFlag] = useState(flaggedFirst ? 'flagged' : 'all');
+  const [order, setOrder] = useState<string>(flaggedFirst ? 'miss' : 'measured');
   const [page, setPage] = useState(0);
   const rows = pointRows(data, {
     series: series === 'all' ? null : Number(series),
-    flag: flag === 'all' ? null : (flag as Flag),
+    flag: flag === 'all' ? null : (flag as FlagChoice),
     window,
+    order: order as PointOrder,
   });
   const isWhole = pointsOf(data).every(({ energy }) => isInside(energy, window));
-  const pages = Math.max(1, Math.ceil(rows.length / ROWS_A_PAGE));
-  const shown = Math.min(page, pages - 1);
+  const shown = Math.min(page, pagesOf(rows.length, ROWS_A_PAGE) - 1);
   const choose = (set: (value: string) => void) => (event: { target: { value: string } }) => {
     set(event.target.value);
     setPage(0);
@@ -60,8 +68,16 @@ export function PointTable({ data, window }: PointTableProps) {
             onChange={choose(setFlag)}
             options={[
               { value: 'all', label: 'all flags' },
+              { value: 'flagged', label: 'flagged' },
               ...Object.entries(FLAG_WORDS).map(([value, label]) => ({ value, label })),
             ]}
+          />
+          <SelectField
+            label="order"
+            className="w-40"
+            value={order}
+            onChange={choose(setOrder)}
+            options={ORDERS}
           />
         </div>
       </div>
@@ -76,38 +92,10 @@ export function PointTable({ data, window }: PointTableProps) {
             rows={rows.slice(shown * ROWS_A_PAGE, (shown + 1) * ROWS_A_PAGE)}
             rowKey={({ key }) => key}
           />
-          <Pager page={shown} pages={pages} rows={rows.length} onPage={setPage} />
+          <Pager page={shown} rows={rows.length} rowsAPage={ROWS_A_PAGE} onPage={setPage} />
         </>
       )}
     </section>
-  );
-}
-
-interface PagerProps {
-  page: number;
-  pages: number;
-  rows: number;
-  onPage: (page: number) => void;
-}
-
-function Pager({ page, pages, rows, onPage }: PagerProps) {
-  return (
-    <p className="mt-3 flex items-baseline gap-4 text-sm text-soft">
-      <span className="figures">
-        {formatCount(page * ROWS_A_PAGE + 1)}–{formatCount(Math.min(rows, (page + 1) * ROWS_A_PAGE))} of{' '}
-        {formatCount(rows)}
-      </span>
-      {pages > 1 ? (
-        <>
-          <Button disabled={page === 0} onClick={() => onPage(page - 1)}>
-            Previous
-          </Button>
-          <Button disabled={page === pages - 1} onClick={() => onPage(page + 1)}>
-            Next
-          </Button>
-        </>
-      ) : null}
-    </p>
   );
 }
 

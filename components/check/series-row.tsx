@@ -1,8 +1,8 @@
 import { RowFrame } from '@/components/layout/row-frame';
 import type { EnergyWindow } from '@/components/plots/energy-window';
 import type { PlotSeries } from '@/components/plots/plot-data';
+import { RowFigures } from '@/components/plots/row-figures';
 import { SeriesStrip } from '@/components/plots/series-strip';
-import { formatPValue, formatScore } from '@/components/ui/format-quantity';
 import { SeriesDot } from './series-dot';
 
 export interface SeriesRowProps {
@@ -19,7 +19,6 @@ export interface SeriesRowProps {
 export function SeriesRow({ series, window, width, lit, chosen, onLight, onChoose }: SeriesRowProps) {
   const { assessed, stated } = series;
   const onCurve = assessed.points.filter(({ flag }) => flag === 'on-curve').length;
-  const misses = assessed.pValue === null ? assessed.rmsZ > 3 : assessed.pValue < 0.001;
   return (
     <li onPointerEnter={() => onLight(true)} onPointerLeave={() => onLight(false)}>
       <RowFrame
@@ -44,19 +43,12 @@ export function SeriesRow({ series, window, width, lit, chosen, onLight, onChoos
         }
         axis={<SeriesStrip points={assessed.points} window={window} width={width} lit={lit} />}
         verdict={
-          <div className="figures grid h-full grid-cols-[auto_1fr_1fr] items-center gap-2 py-1">
-            <span className="min-w-14 whitespace-nowrap">
-              {onCurve} / {stated.points.length}
-            </span>
-            <span className={`text-right ${misses ? 'font-semibold text-off' : ''}`}>
-              <span className="lg:sr-only">RMS z </span>
-              {formatScore(assessed.rmsZ)}
-            </span>
-            <span className="text-right">
-              <span className="lg:sr-only">p </span>
-              {formatPValue(assessed.pValue)}
-            </span>
-          </div>
+          <RowFigures
+            onCurve={onCurve}
+            points={stated.points.length}
+            rmsZ={assessed.rmsZ}
+            pValue={assessed.pValue}
+          />
         }
       />
     </li>

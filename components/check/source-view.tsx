@@ -1,7 +1,7 @@
 'use client';
 
 import Link from 'next/link';
-import { useDeferredValue, useRef } from 'react';
+import { type ReactNode, useDeferredValue, useRef } from 'react';
 import { AxisFrame } from '@/components/layout/axis-frame';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
@@ -30,6 +30,8 @@ interface SourceViewProps {
   onExample: (slug: ExampleSlug) => void;
   onTable: () => void;
   onResult: () => void;
+  /** the way to a draft, for those who may make one */
+  keep?: ReactNode;
 }
 
 const NO_ERRORS: ReadonlyMap<string, string> = new Map();
@@ -70,6 +72,7 @@ export function SourceView(props: SourceViewProps) {
               The server recomputes every point’s free-energy coordinate from the parameters that you state,
               and shows which points miss the master curve. Nobody signs in.
             </p>
+            <div className="mt-3 empty:hidden">{props.keep}</div>
             {hasResult ? (
               <p className="mt-3">
                 <Button onClick={props.onResult}>Back to the last assessment</Button>

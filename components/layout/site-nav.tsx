@@ -4,23 +4,18 @@ import type { Route } from 'next';
 import Link from 'next/link';
 import { usePathname } from 'next/navigation';
 
-interface NavEntry {
+export interface NavEntry {
   href: Route;
   label: string;
 }
 
-const ENTRIES: readonly NavEntry[] = [
-  { href: '/check', label: 'Check data' },
-  { href: '/methods', label: 'Methods' },
-];
-
 /** Where one can go, with the current page marked. Not prefetched: a plot's code is loaded where it is wanted. */
-export function SiteNav() {
+export function SiteNav({ entries, className = '' }: { entries: readonly NavEntry[]; className?: string }) {
   const pathname = usePathname();
   return (
-    <nav aria-label="Main">
-      <ul className="flex gap-x-5 sm:gap-x-7">
-        {ENTRIES.map(({ href, label }) => {
+    <nav aria-label="Main" className={className}>
+      <ul className="flex flex-wrap gap-x-5 lg:gap-x-7">
+        {entries.map(({ href, label }) => {
           const current = pathname === href || pathname.startsWith(`${href}/`);
           return (
             <li key={href}>

@@ -1,11 +1,10 @@
 'use client';
 
-import ReactEChartsCore from 'echarts-for-react/esm/core';
-import { type ReactNode, useMemo } from 'react';
-import { charts } from './charts';
+import { type ReactNode, useCallback, useMemo } from 'react';
 import { POINT_AT, SERIES_AT } from './collapse-layers';
 import { collapseOption } from './collapse-option';
 import { type CollapseView, PANEL_GAP } from './collapse-view';
+import { PlotCanvas } from './plot-canvas';
 import { usePlotColours } from './plot-colours';
 import type { PointPlace } from './plot-data';
 
@@ -24,33 +23,28 @@ export interface CollapseChartProps {
 export default function CollapseChart({ view, sentence, onPoint, onChoose, children }: CollapseChartProps) {
   const colours = usePlotColours();
   const option = useMemo(() => collapseOption({ ...view, colours }), [view, colours]);
-  const events = useMemo(
-    () => ({
-      mouseover: (event: { data?: number[] }) => onPoint?.(placeIn(event.data)),
-      mouseout: () => onPoint?.(null),
-      click: (event: { data?: number[] }) => {
-        const place = placeIn(event.data);
-        if (place) onChoose?.(place);
-      },
-    }),
-    [onPoint, onChoose],
+  const point = useCallback((item: number[] | undefined) => onPoint?.(placeIn(item)), [onPoint]);
+  const choose = useCallback(
+    (item: number[] | undefined) => {
+      const place = placeIn(item);
+      if (place) onChoose?.(place);
+    },
+    [onChoose],
   );
   return (
-    <div role="img" aria-label={sentence} className="relative">
-      <ReactEChartsCore
-        echarts={charts}
-        option={option}
-        onEvents={events}
-        lazyUpdate
-        replaceMerge={['series']}
-        style={{ height: view.heights.plot + view.heights.residual + PANEL_GAP }}
-      />
-      <div className="pointer-events-none absolute inset-0">{children}</div>
-    </div>
+    <PlotCanvas
+      option={option}
+      height={view.heights.plot + view.heights.residual + PANEL_GAP}
+      sentence={sentence}
+      onPoint={point}
+      onChoose={choose}
+    >
+      {children}
+    </PlotCanvas>
   );
 }
 
-function placeIn(data: number[] | undefined): PointPlace | null {
-  if (!data || data.length <= POINT_AT) return null;
-  return { series: data[SERIES_AT], point: data[POINT_AT] };
+function placeIn(item: number[] | undefined): PointPlace | null {
+  if (!item || item.length <= POINT_AT) return null;
+  return { series: item[SERIES_AT], point: item[POINT_AT] };
 }

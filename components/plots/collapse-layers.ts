@@ -1,16 +1,14 @@
 /** The layers of the collapse, from the back to the front. Off-curve is told by shape and stem, never by colour alone. */
 import type { CustomSeriesOption, LineSeriesOption, ScatterSeriesOption } from 'echarts/charts';
 import type { CustomSeriesRenderItemAPI, CustomSeriesRenderItemReturn } from 'echarts/types/dist/shared';
-import { logistic } from '@/lib/engine/logistic';
 import type { PointRow, RowsByFlag } from './collapse-points';
 import { type CollapseView, LARGE, MOST_ERROR_BARS, residualBound } from './collapse-view';
+import { diamondAt, triangleAt } from './flag-shapes';
+import { masterCurveLine } from './master-curve';
 
 export type Layer = LineSeriesOption | ScatterSeriesOption | CustomSeriesOption;
 
-const CURVE_SAMPLES = 240;
 const DIMMED = 0.13;
-const DIAMOND = 4.6;
-const TRIANGLE = 'path://M0,-6 L6,5 L-6,5 Z';
 /** Where a row's series and point stand in a data item. */
 export const SERIES_AT = 2;
 export const POINT_AT = 3;
@@ -30,24 +28,10 @@ function colourOf(view: CollapseView, series: number): string {
   return colour === null ? view.colours.ink : view.colours.series[colour - 1];
 }
 
-/** The master curve over the window. */
+/** The master curve over the window: by energy only. */
 export function masterCurve(view: CollapseView): LineSeriesOption {
-  const { from, to } = view.window;
-  const data = Array.from({ length: CURVE_SAMPLES + 1 }, (_, i) => {
-    const energy = from + ((to - from) * i) / CURVE_SAMPLES;
-    return [energy, logistic(energy)];
-  });
-  return {
-    id: 'master curve',
-    type: 'line',
-    ...panelAxes(0),
-    data: view.by === 'energy' ? data : [],
-    showSymbol: false,
-    silent: true,
-    animation: false,
-    z: 4,
-    lineStyle: { color: view.colours.ink, width: 2 },
-  };
+  const line = masterCurveLine(view.window, view.colours);
+  return view.by === 'energy' ? line : { ...line, data: [] };
 }
 
 /** The separate responses: hidden in the master curve by energy, apart by concentration. */
@@ -136,22 +120,7 @@ function triangles(view: CollapseView, panel: Panel, data: number[][]): CustomSe
     z: 6,
     clip: true,
     encode: { x: 0, y: 1 },
-    renderItem: (_, api) => {
-      const [x, y] = api.coord([api.value(0), api.value(1)]);
-      return {
-        type: 'path',
-        x,
-        y,
-        transition: ['x', 'y'],
-        shape: { d: TRIANGLE.slice('path://'.length) },
-        style: {
-          fill: view.colours.ground,
-          stroke: view.colours.warn,
-          lineWidth: 1.5,
-          opacity: opacityOf(view, Number(api.value(SERIES_AT))),
-        },
-      };
-    },
+    renderItem: (_, api) => triangleAt(shapeOf(view, api)),
   };
 }
 
@@ -165,36 +134,14 @@ function diamonds(view: CollapseView, panel: Panel, data: number[][]): CustomSer
     z: 7,
     clip: true,
     encode: { x: 0, y: 1 },
-    renderItem: (_, api) => diamond(view, panel, api),
+    renderItem: (_, api) =>
+      diamondAt(shapeOf(view, api), panel === 0 ? api.coord([api.value(0), api.value(4)])[1] : null),
   };
 }
 
-function diamond(
-  view: CollapseView,
-  panel: Panel,
-  api: CustomSeriesRenderItemAPI,
-): CustomSeriesRenderItemReturn {
-  const opacity = opacityOf(view, Number(api.value(SERIES_AT)));
+function shapeOf(view: CollapseView, api: CustomSeriesRenderItemAPI) {
   const [x, y] = api.coord([api.value(0), api.value(1)]);
-  const head = {
-    type: 'polygon' as const,
-    shape: {
-      points: [
-        [0, -DIAMOND],
-        [DIAMOND, 0],
-        [0, DIAMOND],
-        [-DIAMOND, 0],
-      ],
-    },
-    style: { fill: view.colours.ground, stroke: view.colours.off, lineWidth: 1.5, opacity },
-  };
-  const curve = api.coord([api.value(0), api.value(4)])[1];
-  const stem = {
-    type: 'line' as const,
-    shape: { x1: 0, y1: 0, x2: 0, y2: curve - y },
-    style: { stroke: view.colours.off, lineWidth: 1, opacity: opacity * 0.8 },
-  };
-  return { type: 'group', x, y, transition: ['x', 'y'], children: panel === 0 ? [stem, head] : [head] };
+  return { x, y, colours: view.colours, opacity: opacityOf(view, Number(api.value(SERIES_AT))) };
 }
 
 /** One standard uncertainty either way: of the measurement up and down, of the energy left and right. */

@@ -3,9 +3,9 @@
 import dynamic from 'next/dynamic';
 import { useEffect, useMemo, useRef, useState, useSyncExternalStore } from 'react';
 import { TRAVEL_MILLISECONDS } from './collapse-option';
-import { type CollapseHeights, PANEL_GAP } from './collapse-view';
 import { concentrationAxisOf } from './concentration-axis';
 import type { EnergyWindow } from './energy-window';
+import { heightsIn } from './panel-heights';
 import { PanelWords } from './panel-words';
 import type { PlotData, PointPlace } from './plot-data';
 import { responseCurves } from './response-curves';
@@ -26,10 +26,6 @@ export interface CollapsePanelProps {
   onChoose?: (place: PointPlace) => void;
 }
 
-/** The residual panel's share of the height, and how tall the two may grow to fill their column. */
-const RESIDUAL_SHARE = 0.29;
-const SHORTEST = 400;
-const TALLEST = 840;
 const STILL = '(prefers-reduced-motion: reduce)';
 
 /** The collapse, the residual panel under it, and the words that stand in them. */
@@ -69,11 +65,6 @@ function useJustChanged(value: unknown, milliseconds: number): boolean {
   return settled !== value;
 }
 
-function heightsIn(height: number): CollapseHeights {
-  const whole = Math.max(SHORTEST, Math.min(TALLEST, height)) - PANEL_GAP;
-  const residual = Math.round(whole * RESIDUAL_SHARE);
-  return { plot: whole - residual, residual };
-}
 function useMedia(query: string): boolean {
   return useSyncExternalStore(
     (changed) => {

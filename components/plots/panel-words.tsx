@@ -1,5 +1,6 @@
 import { unitLabel } from '@/components/ui/unit-label';
 import { exceedsResidualPanel } from './collapse-view';
+import { PanelCaptions } from './panel-captions';
 import { type PlotData, unitOfLigand } from './plot-data';
 
 interface PanelWordsProps {
@@ -7,27 +8,15 @@ interface PanelWordsProps {
   byLigand: string | null;
 }
 
-/** The words that stand in the two panels: above and below their dividing line, which is where this stands. */
+/** The words that stand over the collapse of a dataset. */
 export function PanelWords({ data, byLigand }: PanelWordsProps) {
   return (
-    <>
-      <p className="absolute top-1 left-2 font-semibold text-xs">Activity</p>
+    <PanelCaptions
+      by={byLigand === null ? 'energy' : 'concentration'}
+      residualNote={exceedsResidualPanel(data) ? 'beyond ±9 at the edge' : undefined}
+    >
       {byLigand === null ? null : <AxisName data={data} ligand={byLigand} />}
-      <div className="absolute inset-x-0 bottom-[29%] border-hairline border-b">
-        {byLigand === null ? (
-          <p className="flex justify-between px-2 pb-0.5 text-soft text-xs">
-            <span>favours inactive</span>
-            <span>favours active</span>
-          </p>
-        ) : null}
-        <p className="absolute top-full left-2 pt-1 font-semibold text-xs">
-          Residual{byLigand === null ? '' : ' by energy'}, standard uncertainties
-          {exceedsResidualPanel(data) ? (
-            <span className="font-normal text-soft"> · beyond ±9 at the edge</span>
-          ) : null}
-        </p>
-      </div>
-    </>
+    </PanelCaptions>
   );
 }
 

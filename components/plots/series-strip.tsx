@@ -1,8 +1,11 @@
 import type { AssessedPoint } from '@/lib/engine/assessment';
 import { type EnergyWindow, isInside, pixelOf } from './energy-window';
 
+/** What a strip draws of a point. */
+export type StripPoint = Pick<AssessedPoint, 'energy' | 'z' | 'flag'>;
+
 interface SeriesStripProps {
-  points: readonly AssessedPoint[];
+  points: readonly StripPoint[];
   window: EnergyWindow;
   /** width of the axis column, pixels: what makes the strip's axis the plot's */
   width: number;
@@ -21,7 +24,7 @@ const LONGEST_STEM = 24;
  */
 export function SeriesStrip({ points, window, width, lit }: SeriesStripProps) {
   const shown = points.filter(({ energy }) => isInside(energy, window));
-  const x = ({ energy }: AssessedPoint) => round(pixelOf(energy, window, width));
+  const x = ({ energy }: StripPoint) => round(pixelOf(energy, window, width));
   const onCurve = shown.filter(({ flag }) => flag === 'on-curve');
   const warnings = shown.filter(({ flag }) => flag === 'warning');
   const offCurve = shown.filter(({ flag }) => flag === 'off-curve');
@@ -50,7 +53,7 @@ export function SeriesStrip({ points, window, width, lit }: SeriesStripProps) {
   );
 }
 
-function stem({ z }: AssessedPoint): number {
+function stem({ z }: StripPoint): number {
   return round(Math.max(-LONGEST_STEM, Math.min(LONGEST_STEM, z * PER_Z)));
 }
 

@@ -1,17 +1,15 @@
 'use client';
 
 import { type KeyboardEvent, type PointerEvent, useRef, useState } from 'react';
-import { MINUS } from '@/components/ui/format-quantity';
+import { AxisRuler, signedLabel } from './axis-ruler';
 import {
   type EnergyWindow,
   energyAtPixel,
   keptWithin,
   moveWindow,
   orderedWindow,
-  pixelOf,
   roundEdge,
   scaleWindow,
-  ticksOf,
 } from './energy-window';
 import { useSize } from './use-size';
 
@@ -24,10 +22,6 @@ interface WindowRulerProps {
 
 /** A movement shorter than this is a click, pixels. */
 const LEAST_DRAG = 5;
-
-export function signedLabel(energy: number): string {
-  return String(roundEdge(energy)).replace('-', MINUS);
-}
 
 /**
  * The energy axis as a ruler on which a window is chosen: by dragging along it, or by keys (arrows move the
@@ -78,7 +72,7 @@ export function WindowRuler({ window, full, onChange }: WindowRulerProps) {
       onPointerUp={finish}
       onPointerCancel={() => setDrag(null)}
     >
-      <svg width={width} height={32} aria-hidden="true" className="figures block text-xs">
+      <AxisRuler window={window} width={width}>
         {drag ? (
           <rect
             x={Math.min(drag.from, drag.to)}
@@ -87,30 +81,9 @@ export function WindowRuler({ window, full, onChange }: WindowRulerProps) {
             className="fill-act/25"
           />
         ) : null}
-        {width > 0 ? <Ticks window={window} width={width} /> : null}
-        <text x={8} y={22} className="fill-ink font-semibold">
-          kT
-        </text>
-      </svg>
+      </AxisRuler>
     </div>
   );
-}
-
-function Ticks({ window, width }: { window: EnergyWindow; width: number }) {
-  return ticksOf(window, width).map(({ energy, labelled }) => {
-    const x = pixelOf(energy, window, width);
-    const fits = labelled && x > 34 && x < width - 12;
-    return (
-      <g key={energy}>
-        <line x1={x} x2={x} y1={0} y2={labelled ? 7 : 4} className="stroke-field" />
-        {fits ? (
-          <text x={x} y={22} textAnchor="middle" className="fill-soft">
-            {signedLabel(energy)}
-          </text>
-        ) : null}
-      </g>
-    );
-  });
 }
 
 /** The window that a key makes of a window; null where the key has no meaning here. */

@@ -5,13 +5,21 @@ import { type Action, may } from '@/lib/auth/permissions';
 import { problemResponse } from '@/lib/errors';
 import { log } from '@/lib/log';
 
-type Handler = (request: Request) => Promise<Response> | Response;
+type Handler<Context extends unknown[] = []> = (
+  request: Request,
+  ...context: Context
+) => Promise<Response> | Response;
+
+/** What Next hands to the handler of an address with changing parts, such as `/deposits/[id]`. */
+export interface RouteContext<Parts extends string> {
+  params: Promise<Record<Parts, string>>;
+}
 
 /** The handler, with what it throws logged and answered as a problem that gives nothing away. */
-export function answering(handler: Handler): Handler {
-  return async (request) => {
+export function answering<Context extends unknown[]>(handler: Handler<Context>): Handler<Context> {
+  return async (request, ...context) => {
     try {
-      return await handler(request);
+      return await handler(request, ...context);
     } catch (error) {
       log().error(
         { err: error, method: request.method, path: new URL(request.url).pathname },
@@ -47,8 +55,20 @@ export function unchangingResponse(request: Request, text: string, contentType: 
   return new Response(text, { headers: { ...headers, 'Content-Type': contentType } });
 }
 
-/** If-None-Match compares weakly (RFC 9110, 13.1.2). */
-function matches(header: string | null, etag: string): boolean {
+/**
+ * Whether the caller has the representation of that ETag already.
+ *
+ * @param header If-None-Match, which compares weakly (RFC 9110, 13.1.2)
+ */
+export function matches(header: string | null, etag: string): boolean {
   if (header === null) return false;
   return header.split(',').some((part) => ['*', etag].includes(part.trim().replace(/^W\//, '')));
+}
+
+/** JSON for the caller alone: strong ETag, and 304 where the caller has it already. */
+export function privateResponse(request: Request, json: string, etag: string): Response {
+  const headers = { ETag: etag, 'Cache-Control': 'private, no-cache, no-transform' };
+  if (matches(request.headers.get('if-none-match'), etag))
+    return new Response(null, { status: 304, headers });
+  return new Response(json, { headers: { ...headers, 'Content-Type': 'application/json' } });
 }

@@ -6,7 +6,17 @@ import path from 'node:path';
 
 /** All that a build is made of. */
 const SOURCES = [
-  ...['app', 'components', 'db', 'lib', 'public', 'schemas', 'instrumentation.ts', 'next.config.ts'],
+  ...[
+    'app',
+    'components',
+    'db',
+    'lib',
+    'public',
+    'schemas',
+    'storage',
+    'instrumentation.ts',
+    'next.config.ts',
+  ],
   ...['package-lock.json', 'package.json', 'postcss.config.mjs', 'proxy.ts', 'tsconfig.json'],
 ];
 

@@ -3,6 +3,7 @@ import { probeDatabase } from '@/db/queries/health';
 import { probeComputation } from '@/lib/assessments/assessment-pool';
 import { log } from '@/lib/log';
 import type { Health, PartHealth } from '@/schemas/health';
+import { probeObjects } from '@/storage/objects';
 
 let underWay: Promise<Health> | undefined;
 
@@ -15,17 +16,21 @@ export function checkHealth(): Promise<Health> {
 }
 
 async function ask(): Promise<Health> {
-  const [database, computation] = await Promise.all([databaseHealth(), probeComputation()]);
-  const degraded = database === 'unavailable' || computation === 'unavailable';
-  return { status: degraded ? 'degraded' : 'ok', database, computation };
+  const [database, storage, computation] = await Promise.all([
+    sign(probeDatabase(), 'the database'),
+    sign(probeObjects(), 'the storage of files'),
+    probeComputation(),
+  ]);
+  const degraded = [database, storage, computation].includes('unavailable');
+  return { status: degraded ? 'degraded' : 'ok', database, storage, computation };
 }
 
-async function databaseHealth(): Promise<PartHealth> {
+async function sign(probe: Promise<void>, part: string): Promise<PartHealth> {
   try {
-    await probeDatabase();
+    await probe;
     return 'ok';
   } catch (error) {
-    log().error({ err: error }, 'the database does not answer');
+    log().error({ err: error }, `${part} does not answer`);
     return 'unavailable';
   }
 }

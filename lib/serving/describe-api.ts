@@ -1,16 +1,14 @@
 /** The API in OpenAPI 3.1, made from the same validators that its answers are tested against. */
 import { OpenAPIRegistry, OpenApiGeneratorV31 } from '@asteasolutions/zod-to-openapi';
-import { ERRORS, type ErrorCode } from '@/lib/errors';
+import { ERRORS } from '@/lib/errors';
 import { MOST_BODY_BYTES } from '@/lib/serving/read-body';
 import { assessmentSchema } from '@/schemas/assessment';
 import datasetSchema from '@/schemas/dataset-1.schema.json';
 import { healthSchema } from '@/schemas/health';
-import { problemKindSchema, problemSchema } from '@/schemas/problem';
-
-type Registry = OpenAPIRegistry;
-type RouteConfig = Parameters<Registry['registerPath']>[0];
-type Responses = RouteConfig['responses'];
-type ComponentSchema = Parameters<typeof OpenAPIRegistry.prototype.registerComponent<'schemas'>>[2];
+import { problemKindSchema } from '@/schemas/problem';
+import { type ComponentSchema, problems, type Registry, text, unchanging } from './describe-answers';
+import { registerDeposits } from './describe-deposits';
+import { registerReading } from './describe-reading';
 
 const DATASET = 'Dataset';
 const LIMIT_HEADERS = {
@@ -24,6 +22,8 @@ export function describeApi(): Record<string, unknown> {
   registerDataset(registry);
   registerAssessments(registry);
   registerReads(registry);
+  registerReading(registry);
+  registerDeposits(registry);
   const document = new OpenApiGeneratorV31(registry.definitions).generateDocument({
     openapi: '3.1.0',
     info: {
@@ -34,7 +34,7 @@ export function describeApi(): Record<string, unknown> {
         'the dataset states, and flags the points that do not fall on the master curve. Research data only.',
     },
     servers: [{ url: '/' }],
-    // Said outright: anybody may call, without credentials.
+    // Said outright: anybody may call, without credentials, where a call does not say otherwise.
     security: [],
   });
   return { ...document };
@@ -142,36 +142,4 @@ function registerReads(registry: Registry): void {
       503: { description: 'A part does not', content: { 'application/json': { schema: healthSchema } } },
     },
   });
-}
-
-function unchanging(mediaType: string, schema: typeof problemKindSchema | ComponentSchema): Responses {
-  return {
-    200: {
-      description: 'As of this version',
-      headers: { ETag: text('Changes only with the content') },
-      content: { [mediaType]: { schema } },
-    },
-    304: { description: 'Not changed since the ETag in If-None-Match' },
-  };
-}
-
-/** One answer per status, naming every kind of problem that it can be. */
-function problems(...codes: ErrorCode[]): Responses {
-  const statuses = [...new Set(codes.map((code) => ERRORS[code].status))];
-  return Object.fromEntries(
-    statuses.map((status) => {
-      const kinds = codes.filter((code) => ERRORS[code].status === status);
-      const waits = status === 429 || status === 503;
-      const answer = {
-        description: kinds.map((code) => `\`${code}\`: ${ERRORS[code].meaning}`).join(' '),
-        ...(waits ? { headers: { 'Retry-After': text('Seconds to wait') } } : {}),
-        content: { 'application/problem+json': { schema: problemSchema } },
-      };
-      return [status, answer] as const;
-    }),
-  );
-}
-
-function text(description: string) {
-  return { description, schema: { type: 'string' } } as const;
 }

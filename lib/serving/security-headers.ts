@@ -4,6 +4,11 @@
 export const CLOSED_POLICY =
   "default-src 'none'; base-uri 'none'; form-action 'none'; frame-ancestors 'none'";
 
+/** For a file that somebody uploaded: whatever a browser makes of it, it is nobody's page. */
+const DOWNLOAD_POLICY = `${CLOSED_POLICY}; sandbox`;
+
+const DOWNLOADS = /^\/api\/v1\/deposits\/[^/?#]+\/files\/[^/?#]/;
+
 /** Features of browsers that no page of this site uses. */
 const PERMISSIONS_POLICY = [
   'accelerometer',
@@ -38,6 +43,11 @@ export function securityHeaders(appUrl: string): Record<string, string> {
       ? { 'Strict-Transport-Security': 'max-age=63072000; includeSubDomains' }
       : {}),
   };
+}
+
+/** The content policy of an address before a page puts its own in the place. Next takes none of a route handler. */
+export function policyOfAddress(url: string): string {
+  return DOWNLOADS.test(url) ? DOWNLOAD_POLICY : CLOSED_POLICY;
 }
 
 /**

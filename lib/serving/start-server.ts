@@ -9,19 +9,20 @@ import { closeDatabase } from '@/db/client';
 import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
 import { checkEnvOrExit, type Env } from '@/lib/env';
 import { log } from '@/lib/log';
+import { startLocalStorage, stopLocalStorage } from '@/storage/local-server';
+import { bodyBounds, LONGEST_BODY_MS } from './body-bounds';
+import { limitBodyTime } from './limit-body-time';
 import { lingerBeforeEnd } from './linger';
 import { logRequest } from './log-request';
 import { PEER_HEADER, peerAddress } from './peer';
-import { MOST_BODY_BYTES } from './read-body';
 import { refuseBrokenRequest, refuseUnreadablePath } from './refuse-broken-request';
-import { securityHeaders } from './security-headers';
+import { policyOfAddress, securityHeaders } from './security-headers';
 import { stopOnSignal } from './stop-on-signal';
 
 type NextHandler = (request: IncomingMessage, response: ServerResponse) => Promise<void>;
 
-/** Milliseconds: for the headers of a request, for the whole of it, and for an idle connection. */
+/** Milliseconds: for the headers of a request, and for an idle connection. */
 const HEADERS_TIMEOUT_MS = 15_000;
-const REQUEST_TIMEOUT_MS = 60_000;
 const IDLE_TIMEOUT_MS = 10_000;
 
 /** Starts serving and resolves once calls are taken. Ends the process with a sentence where it cannot. */
@@ -30,15 +31,23 @@ export async function startServer({ development }: { development: boolean }): Pr
   Object.assign(process.env, {
     NODE_ENV: development ? 'development' : 'production',
     NEXT_TELEMETRY_DISABLED: '1',
+    // The SDK is pinned to a version that runs on this Node; what it says of later ones is no news here.
+    AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
   });
   const env = checkEnvOrExit();
   const server = createServer();
-  const [handle] = await Promise.all([prepareNext(server, env, development), prepareDatabase(env)]);
+  const [handle] = await Promise.all([
+    prepareNext(server, env, development),
+    prepareDatabase(env),
+    startLocalStorage(),
+  ]);
+  if (env.demo) await loadDemonstration();
   answerWith(server, handle, env);
   await listen(server, env);
   stopOnSignal(server, async () => {
     await closeAssessmentPool();
     await closeDatabase();
+    await stopLocalStorage();
   });
   announce(server, env);
 }
@@ -55,6 +64,12 @@ async function prepareDatabase({ databaseUrl }: Env): Promise<void> {
     );
     process.exit(1);
   }
+}
+
+/** Loaded only here: elsewhere the server knows nothing of it. */
+async function loadDemonstration(): Promise<void> {
+  const { loadScenario } = await import('@/db/seed/load-scenario');
+  await loadScenario();
 }
 
 async function prepareNext(server: Server, env: Env, development: boolean): Promise<NextHandler> {
@@ -77,7 +92,9 @@ function answerWith(server: Server, handle: NextHandler, env: Env): void {
     const claimed = Array.isArray(forwardedFor) ? forwardedFor.join(',') : forwardedFor;
     request.headers[PEER_HEADER] = peerAddress(request.socket.remoteAddress, claimed, env.trustedProxies);
     for (const [name, value] of Object.entries(headers)) response.setHeader(name, value);
+    response.setHeader('Content-Security-Policy', policyOfAddress(request.url ?? ''));
     logRequest(request, response);
+    limitBodyTime(request, response, (error) => refuseBrokenRequest(error, request.socket, headers));
     if (refuseUnreadablePath(request, response)) return;
     handle(request, response).catch((error: unknown) => {
       log().error({ err: error }, 'a request failed');
@@ -85,7 +102,7 @@ function answerWith(server: Server, handle: NextHandler, env: Env): void {
     });
   };
   server.headersTimeout = HEADERS_TIMEOUT_MS;
-  server.requestTimeout = REQUEST_TIMEOUT_MS;
+  server.requestTimeout = LONGEST_BODY_MS;
   server.keepAliveTimeout = IDLE_TIMEOUT_MS;
   server.on('request', (request: IncomingMessage, response: ServerResponse) => {
     lingerBeforeEnd(request, response);
@@ -93,7 +110,7 @@ function answerWith(server: Server, handle: NextHandler, env: Env): void {
   });
   server.on('checkContinue', (request: IncomingMessage, response: ServerResponse) => {
     // A caller that asks before it sends is not told to send what would be refused; nothing of it is on its way then.
-    if (Number(request.headers['content-length'] ?? 0) <= MOST_BODY_BYTES) {
+    if (Number(request.headers['content-length'] ?? 0) <= bodyBounds(request.url ?? '').mostBytes) {
       response.writeContinue();
       lingerBeforeEnd(request, response);
     }

@@ -29,11 +29,13 @@ describeInBrowser('the page by keyboard', ({ newPage, url }) => {
     const page = await newPage();
     await page.goto(url('/check'));
     await editorIn(page).waitFor();
-    expect(await tabs(page, 12)).toEqual([
+    expect(await tabs(page, 14)).toEqual([
       'Skip to the content',
       'Curvekeep',
+      'Browse',
       'Check data',
       'Methods',
+      'Sign in',
       'schema',
       'Methods',
       'Choose a file',

@@ -98,6 +98,6 @@ describe('health', () => {
     const response = await get('/api/v1/health');
     expect(response.status).toBe(200);
     const health = healthSchema.parse(await response.json());
-    expect(health).toEqual({ status: 'ok', database: 'ok', computation: 'ok' });
+    expect(health).toEqual({ status: 'ok', database: 'ok', storage: 'ok', computation: 'ok' });
   });
 });

@@ -21,6 +21,7 @@ describe('without its database', () => {
     expect(healthSchema.parse(JSON.parse(text))).toEqual({
       status: 'degraded',
       database: 'unavailable',
+      storage: 'ok',
       computation: 'ok',
     });
     expect(text).not.toMatch(/sql|curvekeep\.db|\/tmp|at /i);

@@ -34,6 +34,11 @@ export async function askApi(url: string, document: DatasetDocument): Promise<Pl
 /** Waits until an assessment and its plot stand there. */
 export async function resultShown(page: Page): Promise<void> {
   await verdictIn(page).waitFor();
+  await drawnCanvas(page);
+}
+
+/** Waits until the plot has drawn. */
+export async function drawnCanvas(page: Page): Promise<void> {
   await canvasIn(page).waitFor();
   // The canvas stands before the chart has drawn on it: across its middle something crosses every column then.
   await page.waitForFunction(

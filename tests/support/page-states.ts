@@ -2,6 +2,7 @@
 import type { Page } from 'playwright-core';
 import { EXAMPLE_TABLE } from '@/lib/documents/examples/examples';
 import type { Visit } from './browse-app';
+import { browseShown } from './browse-page';
 import { assessIn, editorIn, noticeIn, paste, resultShown } from './check-page';
 import { brokenDocument } from './submitted-documents';
 
@@ -16,6 +17,11 @@ export interface PageState {
 
 export const PAGE_STATES: readonly PageState[] = [
   { state: 'home', path: '/', title: 'Curvekeep' },
+  { state: 'browse, all', path: '/datasets', title: 'Browse', reach: browseShown },
+  { state: 'browse, nothing fits', path: '/datasets?system=alrq-velline&ligand=halide', title: 'Browse' },
+  { state: 'a dataset', path: '/datasets/CK-000122', title: 'CK-000122', reach: resultShown },
+  { state: 'a withdrawn dataset', path: '/datasets/CK-000100', title: 'Withdrawn dataset' },
+  { state: 'a laboratory', path: '/labs/sunder-lab', title: 'Sunder Lab', reach: browseShown },
   { state: 'check, empty', path: '/check', title: 'Check data' },
   { state: 'check, a result', path: '/check?example=thousand-fold', title: 'Check data', reach: resultShown },
   {

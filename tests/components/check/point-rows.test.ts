@@ -33,6 +33,21 @@ describe('rows of the table', () => {
     expect(rows.length).toBeLessThan(data.assessment.summary.points);
   });
 
+  it('can be the flagged ones, the furthest off first', () => {
+    const rows = pointRows(data, { series: null, flag: 'flagged', window: EVERYTHING, order: 'miss' });
+    const { warning, offCurve } = data.assessment.summary;
+    expect(rows).toHaveLength(warning + offCurve);
+    const misses = rows.map(({ point }) => Math.abs(point.z));
+    expect(misses).toEqual([...misses].sort((a, b) => b - a));
+  });
+
+  it('can stand by energy', () => {
+    const rows = pointRows(data, { series: null, flag: null, window: EVERYTHING, order: 'energy' });
+    const energies = rows.map(({ point }) => point.energy);
+    expect(energies).toEqual([...energies].sort((a, b) => a - b));
+    expect(rows).toHaveLength(data.assessment.summary.points);
+  });
+
   it('can be none', () => {
     expect(pointRows(data, { series: 0, flag: 'off-curve', window: EVERYTHING })).toEqual([]);
   });

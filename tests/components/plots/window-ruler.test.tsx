@@ -1,6 +1,7 @@
 import { renderToStaticMarkup } from 'react-dom/server';
 import { describe, expect, it } from 'vitest';
-import { signedLabel, WindowRuler, windowAfterKey } from '@/components/plots/window-ruler';
+import { signedLabel } from '@/components/plots/axis-ruler';
+import { WindowRuler, windowAfterKey } from '@/components/plots/window-ruler';
 
 const WINDOW = { from: -6, to: 4 };
 const FULL = { from: -18, to: 5 };

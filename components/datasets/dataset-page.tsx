@@ -1,0 +1,56 @@
+'use client';
+
+import { AssessedView } from '@/components/check/assessed-view';
+import { CurveOutline } from '@/components/plots/curve-outline';
+import type { EnergyWindow } from '@/components/plots/energy-window';
+import type { DatasetAnswer } from '@/schemas/dataset-answers';
+import { DatasetRecord } from './dataset-record';
+import { PublishedHead } from './published-head';
+import { type DocumentHead, publishedPlotData } from './published-plot-data';
+import { ReadFailure } from './read-failure';
+import { useDatasetPoints } from './use-collection';
+import { useLook } from './use-look';
+
+/** What the page of a dataset shows, its points aside. */
+export type PublishedRecord = Omit<DatasetAnswer, 'document'> & { document: DocumentHead };
+
+interface DatasetPageProps {
+  dataset: PublishedRecord;
+  /** the window that it opens with */
+  opening: EnergyWindow;
+}
+
+/** One published dataset: statements, collapse, strips, verdict, points; below what is on record about it. */
+export function DatasetPage({ dataset, opening }: DatasetPageProps) {
+  const { document, assessment, accession, revision } = dataset;
+  const { data: answer, error, refetch } = useDatasetPoints(`${accession}.${revision}`, true);
+  const [look, setLook] = useLook(
+    opening,
+    document.ligands.map(({ id }) => id),
+  );
+  return (
+    <>
+      <AssessedView
+        data={publishedPlotData(document, assessment, answer?.points ?? [])}
+        look={look}
+        onLook={setLook}
+        head={<PublishedHead dataset={dataset} />}
+        flaggedFirst={assessment.summary.warning + assessment.summary.offCurve > 0}
+        pending={
+          answer ? undefined : (
+            <div className="relative min-h-[400px] grow lg:min-h-[clamp(30rem,100dvh_-_14rem,52rem)]">
+              {error ? (
+                <div className="p-4">
+                  <ReadFailure what="The points" error={error} onRetry={() => void refetch()} />
+                </div>
+              ) : (
+                <CurveOutline window={look.window} />
+              )}
+            </div>
+          )
+        }
+      />
+      <DatasetRecord dataset={dataset} />
+    </>
+  );
+}

@@ -1,0 +1,27 @@
+/** Lists the deposits of the actor's laboratories, each with what its newest revision amounts to. */
+import { readDatabase } from '@/db/client';
+import type { DepositHead } from '@/db/queries/deposits';
+import { selectRevisions } from '@/db/queries/revisions';
+import type { AssessmentSummary } from '@/lib/engine/assessment';
+import type { Outcome } from '@/lib/errors';
+import { listDeposits } from './list-deposits';
+
+export interface CountedDeposit extends DepositHead {
+  /** null where nothing was submitted yet */
+  summary: AssessmentSummary | null;
+}
+
+/** A page of the list, as `listDeposits` gives it. */
+export async function listDepositsWithCounts(
+  call: Parameters<typeof listDeposits>[0],
+): Promise<Outcome<{ deposits: CountedDeposit[]; next: string | null }>> {
+  const listed = await listDeposits(call);
+  if (!listed.ok) return listed;
+  const deposits = await Promise.all(listed.deposits.map(withCounts));
+  return { ok: true, deposits, next: listed.next };
+}
+
+async function withCounts(deposit: DepositHead): Promise<CountedDeposit> {
+  const [newest] = await selectRevisions(await readDatabase(), deposit.id);
+  return { ...deposit, summary: newest ? (JSON.parse(newest.summary) as AssessmentSummary) : null };
+}

@@ -1,0 +1,177 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { readDatabase } from '@/db/client';
+import { selectDecisions } from '@/db/queries/decisions';
+import { selectRevisions } from '@/db/queries/revisions';
+import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
+import { type Actor, VISITOR } from '@/lib/auth/actor';
+import { acceptDeposit } from '@/lib/curation/accept-deposit';
+import { askForChanges } from '@/lib/curation/ask-for-changes';
+import { listQueue } from '@/lib/curation/list-queue';
+import { recallDeposit } from '@/lib/deposits/recall-deposit';
+import type { DepositState } from '@/lib/deposits/states';
+import { submitDeposit } from '@/lib/deposits/submit-deposit';
+import { auditOf, codeOf, makeCollection, makeDeposit, stored, worked } from '@/tests/support/collection';
+import { temporaryDatabase } from '@/tests/support/temporary-database';
+
+temporaryDatabase();
+let cast: Awaited<ReturnType<typeof makeCollection>>;
+beforeAll(async () => {
+  cast = await makeCollection();
+});
+afterAll(closeAssessmentPool);
+
+const VERBS = {
+  'accepting a deposit': (actor: Actor, id: string) => acceptDeposit({ actor, id }),
+  'asking for changes': (actor: Actor, id: string) =>
+    askForChanges({ actor, id, letter: 'State the temperature.' }),
+};
+const decisionsOf = async (id: string) => selectDecisions(await readDatabase(), id);
+
+describe.each(Object.entries(VERBS))('%s', { timeout: 60_000 }, (_, decide) => {
+  it.each(['submitted', 'in-review'] as DepositState[])('works for what is %s', async (state) => {
+    const id = await makeDeposit(cast, state);
+    worked(await decide(cast.curator, id));
+    expect(await decisionsOf(id)).toMatchObject([{ revision: 1, decidedBy: `person:${cast.curator.id}` }]);
+  });
+
+  it('refuses the wrong role', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    expect(codeOf(await decide(VISITOR, id))).toBe('unauthenticated');
+    expect(codeOf(await decide(cast.depositor, id))).toBe('forbidden');
+    expect(codeOf(await decide(cast.token, id))).toBe('forbidden');
+    expect(codeOf(await decide(cast.administrator, id))).toBe('forbidden');
+    expect(codeOf(await decide(cast.outsider, id))).toBe('not-found');
+    expect(await stored(id)).toMatchObject({ state: 'submitted' });
+    expect(await decisionsOf(id)).toEqual([]);
+  });
+
+  it('refuses a curator of the depositing laboratory', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    expect(codeOf(await decide(cast.ownCurator, id))).toBe('forbidden');
+    expect(await stored(id)).toMatchObject({ state: 'submitted' });
+    expect((await auditOf(id)).at(-1)).toBe('refused: decide-deposit');
+  });
+
+  it.each(['changes-requested', 'published', 'declined', 'withdrawn'] as DepositState[])(
+    'refuses the wrong state: %s',
+    async (state) => {
+      const id = await makeDeposit(cast, state);
+      const before = await stored(id);
+      expect(codeOf(await decide(cast.curator, id))).toBe('conflict');
+      expect(await stored(id)).toEqual(before);
+    },
+  );
+
+  it('knows nothing of drafts', async () => {
+    expect(codeOf(await decide(cast.curator, await makeDeposit(cast)))).toBe('not-found');
+  });
+});
+
+describe('a decision', { timeout: 60_000 }, () => {
+  it('to accept publishes at once, under an accession that nobody had', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    const { deposit, accession } = worked(
+      await acceptDeposit({ actor: cast.curator, id, letter: 'Thank you.' }),
+    );
+    expect(deposit).toMatchObject({ state: 'published', accession });
+    expect(await decisionsOf(id)).toMatchObject([{ kind: 'accepted', letter: 'Thank you.' }]);
+    const [revision] = await selectRevisions(await readDatabase(), id);
+    expect(revision?.publishedAt).toBeTypeOf('number');
+    const number = `CK-${String(accession).padStart(6, '0')}.1`;
+    expect((await auditOf(id)).slice(-2)).toEqual(['accepted: revision 1', `published: ${number}`]);
+    const next = worked(
+      await acceptDeposit({ actor: cast.curator, id: await makeDeposit(cast, 'submitted') }),
+    );
+    expect(next.accession).toBe(accession + 1);
+  });
+
+  it('to ask for changes needs a letter of at most 20,000 characters', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    for (const letter of ['', ' \n ', 'x'.repeat(20_001)]) {
+      const outcome = await askForChanges({ actor: cast.curator, id, letter });
+      expect(codeOf(outcome)).toBe('invalid-input');
+      expect(outcome.ok || outcome.failure.members?.errors?.[0]?.pointer).toBe('/letter');
+    }
+    expect(codeOf(await acceptDeposit({ actor: cast.curator, id, letter: 'x'.repeat(20_001) }))).toBe(
+      'invalid-input',
+    );
+    worked(await askForChanges({ actor: cast.curator, id, letter: 'x'.repeat(20_000) }));
+    expect(await stored(id)).toMatchObject({ state: 'changes-requested' });
+  });
+
+  it('about a revision that is not the newest any more is refused', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    worked(await recallDeposit({ actor: cast.depositor, id }));
+    worked(await submitDeposit({ actor: cast.depositor, id }));
+    expect(codeOf(await acceptDeposit({ actor: cast.curator, id, revision: 1 }))).toBe('conflict');
+    worked(await acceptDeposit({ actor: cast.curator, id, revision: 2 }));
+  });
+
+  it('is one of fifty that are made at once', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    const outcomes = await Promise.all(
+      Array.from({ length: 50 }, (_, i) =>
+        i % 2 === 0
+          ? acceptDeposit({ actor: cast.curator, id })
+          : askForChanges({ actor: cast.curator, id, letter: `number ${i}` }),
+      ),
+    );
+    expect(outcomes.filter(({ ok }) => ok)).toHaveLength(1);
+    expect(outcomes.filter((outcome) => !outcome.ok && outcome.failure.code === 'conflict')).toHaveLength(49);
+    expect(await decisionsOf(id)).toHaveLength(1);
+  });
+
+  it('has one effect under one key', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    const call = { actor: cast.curator, id, idempotencyKey: 'decide-once' };
+    const first = worked(await acceptDeposit(call));
+    expect(worked(await acceptDeposit(call))).toEqual(first);
+    expect(codeOf(await acceptDeposit({ ...call, letter: 'another' }))).toBe('idempotency-mismatch');
+    expect(await decisionsOf(id)).toHaveLength(1);
+  });
+
+  it('gives many deposits at once accessions of their own, without a gap', async () => {
+    const ids: string[] = [];
+    for (let i = 0; i < 8; i++) ids.push(await makeDeposit(cast, 'submitted'));
+    const outcomes = await Promise.all(ids.map((id) => acceptDeposit({ actor: cast.curator, id })));
+    const accessions = outcomes.map((outcome) => worked(outcome).accession).toSorted((a, b) => a - b);
+    expect(accessions).toEqual(accessions.map((_, i) => (accessions[0] ?? 0) + i));
+  });
+});
+
+describe('the queue', { timeout: 60_000 }, () => {
+  it('holds what waits, with its assessment, the longest waiting first', async () => {
+    const ids = [await makeDeposit(cast, 'submitted'), await makeDeposit(cast, 'in-review')];
+    await makeDeposit(cast, 'changes-requested');
+    await makeDeposit(cast);
+    const { queue } = worked(await listQueue({ actor: cast.curator }));
+    expect(queue.filter(({ id }) => ids.includes(id))).toMatchObject([
+      { id: ids[0], state: 'submitted', revision: 1, labSlug: cast.lab.labSlug, blocked: false },
+      { id: ids[1], state: 'in-review', summary: { points: 2 } },
+    ]);
+    expect(new Set(queue.map(({ state }) => state))).toEqual(new Set(['submitted', 'in-review']));
+    expect(queue.map(({ submittedAt }) => submittedAt)).toEqual(
+      queue.map(({ submittedAt }) => submittedAt).toSorted(),
+    );
+    expect(queue.every(({ ageMs }) => ageMs >= 0)).toBe(true);
+  });
+
+  it('marks what a curator may not decide on', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    const { queue } = worked(await listQueue({ actor: cast.ownCurator }));
+    expect(queue.find((entry) => entry.id === id)?.blocked).toBe(true);
+  });
+
+  it('shows a resubmission once, as its newest revision', async () => {
+    const id = await makeDeposit(cast, 'changes-requested');
+    worked(await submitDeposit({ actor: cast.depositor, id }));
+    const { queue } = worked(await listQueue({ actor: cast.curator }));
+    expect(queue.filter((entry) => entry.id === id)).toMatchObject([{ revision: 2 }]);
+  });
+
+  it('is for curators', async () => {
+    expect(codeOf(await listQueue({ actor: VISITOR }))).toBe('unauthenticated');
+    for (const actor of [cast.depositor, cast.token, cast.administrator])
+      expect(codeOf(await listQueue({ actor }))).toBe('forbidden');
+  });
+});

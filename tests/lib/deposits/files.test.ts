@@ -1,0 +1,194 @@
+import { createHash, randomBytes } from 'node:crypto';
+import { readdir } from 'node:fs/promises';
+import path from 'node:path';
+import { Readable } from 'node:stream';
+import { buffer } from 'node:stream/consumers';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
+import { type Actor, VISITOR } from '@/lib/auth/actor';
+import { attachFile } from '@/lib/deposits/attach-file';
+import { detectMediaType } from '@/lib/deposits/detect-media-type';
+import { listFiles, openFile } from '@/lib/deposits/open-file';
+import { removeFile } from '@/lib/deposits/remove-file';
+import type { DepositState } from '@/lib/deposits/states';
+import { submitDeposit } from '@/lib/deposits/submit-deposit';
+import { startLocalStorage, stopLocalStorage } from '@/storage/local-server';
+import { codeOf, forceState, makeCollection, makeDeposit, tokenOf, worked } from '@/tests/support/collection';
+import { temporaryDatabase } from '@/tests/support/temporary-database';
+
+const { dataDir } = temporaryDatabase();
+let cast: Awaited<ReturnType<typeof makeCollection>>;
+beforeAll(async () => {
+  await startLocalStorage();
+  cast = await makeCollection();
+});
+afterAll(async () => {
+  await closeAssessmentPool();
+  await stopLocalStorage();
+});
+
+const sha256 = (bytes: Buffer) => createHash('sha256').update(bytes).digest('hex');
+
+const attach = (actor: Actor, id: string, bytes = Buffer.from('x'), more: Record<string, string> = {}) =>
+  attachFile({ actor, id, name: 'raw data.csv', stream: Readable.from([bytes]), ...more });
+
+async function objectCount(): Promise<number> {
+  const names = await readdir(path.join(dataDir(), 'objects'), { recursive: true });
+  return names.filter((name) => name.endsWith('_object')).length;
+}
+
+describe('attaching a file', { timeout: 60_000 }, () => {
+  it('works: the bytes come back as they were', async () => {
+    const id = await makeDeposit(cast);
+    const bytes = randomBytes(6_000_001);
+    const { file } = worked(await attach(cast.token, id, bytes, { sha256: sha256(bytes) }));
+    expect(file).toMatchObject({ name: 'raw data.csv', size: bytes.length, sha256: sha256(bytes) });
+    const opened = worked(await openFile({ actor: cast.depositor, id, fileId: file.id }));
+    expect((await buffer(await opened.open())).equals(bytes)).toBe(true);
+    expect(worked(await listFiles({ actor: cast.depositor, id })).files).toEqual([file]);
+  });
+
+  it('refuses bytes that are not those declared, and keeps nothing of them', async () => {
+    const id = await makeDeposit(cast);
+    const before = await objectCount();
+    const outcome = await attach(cast.token, id, Buffer.from('changed'), {
+      sha256: sha256(Buffer.from('sent')),
+    });
+    expect(codeOf(outcome)).toBe('digest-mismatch');
+    expect(worked(await listFiles({ actor: cast.token, id })).files).toEqual([]);
+    expect(await objectCount()).toBe(before);
+  });
+
+  it('keeps nothing of a body that breaks off', async () => {
+    const id = await makeDeposit(cast);
+    const before = await objectCount();
+    async function* breaking() {
+      yield randomBytes(100);
+      throw new Error('gone');
+    }
+    const stream = Readable.from(breaking());
+    expect(codeOf(await attachFile({ actor: cast.token, id, name: 'x', stream }))).toBe('incomplete-body');
+    expect(await objectCount()).toBe(before);
+  });
+
+  it('keeps one file of calls under one key', async () => {
+    const id = await makeDeposit(cast);
+    const before = await objectCount();
+    const send = () => attach(cast.token, id, Buffer.from('once'), { idempotencyKey: 'file-once' });
+    const files = [
+      worked(await send()),
+      worked(await send()),
+      ...(await Promise.all([send(), send()])).map(worked),
+    ];
+    expect(new Set(files.map(({ file }) => file.id)).size).toBe(1);
+    expect(await objectCount()).toBe(before + 1);
+    const other = await attach(cast.token, id, Buffer.from('other'), { idempotencyKey: 'file-once' });
+    expect(codeOf(other)).toBe('idempotency-mismatch');
+    expect(await objectCount()).toBe(before + 1);
+  });
+
+  it('refuses the wrong role', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    expect(codeOf(await attach(VISITOR, id))).toBe('unauthenticated');
+    expect(codeOf(await attach(cast.curator, id))).toBe('forbidden');
+    expect(codeOf(await attach(tokenOf(cast.lab, 'read-drafts'), await makeDeposit(cast)))).toBe('forbidden');
+  });
+
+  it('refuses the wrong laboratory', async () => {
+    expect(codeOf(await attach(cast.outsider, await makeDeposit(cast)))).toBe('not-found');
+  });
+
+  it.each(['submitted', 'in-review', 'published', 'withdrawn'] as DepositState[])(
+    'refuses the wrong state: %s',
+    async (state) => {
+      expect(codeOf(await attach(cast.depositor, await makeDeposit(cast, state)))).toBe('conflict');
+    },
+  );
+
+  it('keeps nothing where the deposit is submitted while the file arrives', async () => {
+    const id = await makeDeposit(cast);
+    const before = await objectCount();
+    async function* slowly() {
+      yield Buffer.from('first half, ');
+      worked(await submitDeposit({ actor: cast.depositor, id }));
+      yield Buffer.from('second half');
+    }
+    const stream = Readable.from(slowly());
+    expect(codeOf(await attachFile({ actor: cast.token, id, name: 'x', stream }))).toBe('conflict');
+    expect(await objectCount()).toBe(before);
+  });
+});
+
+describe('removing a file', { timeout: 60_000 }, () => {
+  const withFile = async () => {
+    const id = await makeDeposit(cast);
+    return { id, fileId: worked(await attach(cast.depositor, id)).file.id };
+  };
+
+  it('works', async () => {
+    const place = await withFile();
+    const before = await objectCount();
+    worked(await removeFile({ actor: cast.token, ...place }));
+    expect(codeOf(await openFile({ actor: cast.token, ...place }))).toBe('not-found');
+    expect(await objectCount()).toBe(before - 1);
+  });
+
+  it('refuses the wrong role and the wrong laboratory', async () => {
+    const place = await withFile();
+    expect(codeOf(await removeFile({ actor: VISITOR, ...place }))).toBe('unauthenticated');
+    expect(codeOf(await removeFile({ actor: tokenOf(cast.lab, 'submit'), ...place }))).toBe('forbidden');
+    expect(codeOf(await removeFile({ actor: cast.outsider, ...place }))).toBe('not-found');
+    const elsewhere = { id: await makeDeposit(cast), fileId: place.fileId };
+    expect(codeOf(await removeFile({ actor: cast.depositor, ...elsewhere }))).toBe('not-found');
+    worked(await openFile({ actor: cast.depositor, ...place }));
+  });
+
+  it.each(['submitted', 'changes-requested', 'published'] as DepositState[])(
+    'refuses the wrong state: %s',
+    async (state) => {
+      const place = await withFile();
+      await forceState(place.id, state);
+      expect(codeOf(await removeFile({ actor: cast.depositor, ...place }))).toBe('conflict');
+    },
+  );
+});
+
+describe('reading a file', { timeout: 60_000 }, () => {
+  it('is for the laboratory; for a curator once it is submitted; for anybody once it is published', async () => {
+    const id = await makeDeposit(cast);
+    const { file } = worked(await attach(cast.depositor, id));
+    const open = async (actor: Actor) => {
+      const opened = await openFile({ actor, id, fileId: file.id });
+      return opened.ok ? 'open' : opened.failure.code;
+    };
+    const all = async () => [
+      await open(cast.depositor),
+      await open(cast.curator),
+      await open(cast.outsider),
+      await open(VISITOR),
+    ];
+    expect(await all()).toEqual(['open', 'not-found', 'not-found', 'not-found']);
+    worked(await submitDeposit({ actor: cast.depositor, id }));
+    expect(await all()).toEqual(['open', 'open', 'not-found', 'not-found']);
+    await forceState(id, 'published');
+    expect(await all()).toEqual(['open', 'open', 'open', 'open']);
+  });
+});
+
+describe('the media type', () => {
+  it.each([
+    ['%PDF-1.7 …', 'application/pdf'],
+    ['PK\x03\x04rest', 'application/zip'],
+    ['<html><script>', 'text/plain; charset=utf-8'],
+    ['c;a\n1;0,5\n', 'text/plain; charset=utf-8'],
+    ['', 'application/octet-stream'],
+    ['MZ\x00\x01', 'application/octet-stream'],
+  ])('of %j is judged by its bytes', (head, type) => {
+    expect(detectMediaType(Buffer.from(head, 'latin1'))).toBe(type);
+  });
+
+  it('is text also where the first bytes end within a character', () => {
+    expect(detectMediaType(Buffer.from('µM', 'utf8').subarray(0, 1))).toBe('text/plain; charset=utf-8');
+    expect(detectMediaType(Buffer.from([0x61, 0xff, 0x62]))).toBe('application/octet-stream');
+  });
+});

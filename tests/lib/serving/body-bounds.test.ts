@@ -1,0 +1,29 @@
+import { describe, expect, it } from 'vitest';
+import { bodyBounds } from '@/lib/serving/body-bounds';
+import { policyOfAddress } from '@/lib/serving/security-headers';
+
+const MIB = 2 ** 20;
+
+describe('by its address', () => {
+  it.each([
+    ['/api/v1/deposits/abc/files', 100],
+    ['/api/v1/deposits/abc/files?name=x', 100],
+    ['/api/v1/deposits/abc/files/def', 8],
+    ['/api/v1/deposits/abc', 8],
+    ['/api/v1/assessments?x=/api/v1/deposits/abc/files', 8],
+    ['', 8],
+  ])('a body to %s may have %d MiB', (url, mib) => {
+    expect(bodyBounds(url).mostBytes).toBe(mib * MIB);
+  });
+
+  it('a file is sandboxed, and nothing else', () => {
+    expect(policyOfAddress('/api/v1/deposits/abc/files/def')).toContain('; sandbox');
+    for (const url of [
+      '/api/v1/deposits/abc/files',
+      '/api/v1/deposits/abc/files/',
+      '/check',
+      '/api/v1/health',
+    ])
+      expect(policyOfAddress(url)).not.toContain('sandbox');
+  });
+});
