@@ -139,3 +139,30 @@ describe('correlations act on the numbers as stated', () => {
     expectClose(sum - 0.5, 0.5 - difference, 1e-12);
   });
 });
+
+describe('signs of the derivatives, seen through a perfect correlation with the gap', () => {
+  const names: [keyof Numbers, string][] = [
+    ['perSite', 'main/gapPerSite'],
+    ['sites', 'main/sites'],
+    ['inactive', `main/${LIGAND}/inactive`],
+    ['active', `main/${LIGAND}/active`],
+    ['competitor', 'main/rival/inactive'],
+    ['slope', 'V/slope'],
+  ];
+  const signedSlopes = (name: keyof Numbers) => {
+    const step = 1e-5 * Math.abs(NUMBERS[name]);
+    const above = energies({ ...NUMBERS, [name]: NUMBERS[name] + step });
+    const below = energies({ ...NUMBERS, [name]: NUMBERS[name] - step });
+    return above.map((energy, i) => (energy - below[i]) / (2 * step));
+  };
+  it.each(names)('%s', (name, quantity) => {
+    const [gapU, u] = [0.4, Math.abs(NUMBERS[name]) / 10];
+    const dataset = build(NUMBERS, { gap: gapU, [name]: u });
+    dataset.series[0].parameters.correlations = [{ a: 'gap', b: quantity, r: 1 }];
+    const [ofGap, ofName] = [signedSlopes('gap'), signedSlopes(name)];
+    assessOne(dataset).points.forEach((point, i) => {
+      expectClose(point.energyU, Math.abs(ofGap[i] * gapU + ofName[i] * u), 1e-6, `${name} at point ${i}`);
+    });
+    expect(Math.max(...ofName.map((slope) => Math.abs(slope) * u))).toBeGreaterThan(1e-3);
+  });
+});
