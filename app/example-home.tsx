@@ -1,5 +1,5 @@
+import { FlagCounts } from '@/components/assessed/flag-counts';
 import { ExampleCollapse } from '@/components/check/example-collapse';
-import { FlagCounts } from '@/components/check/flag-counts';
 import { AxisFrame } from '@/components/layout/axis-frame';
 import { EnergyRuler } from '@/components/layout/energy-ruler';
 import { RowFrame } from '@/components/layout/row-frame';

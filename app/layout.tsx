@@ -32,7 +32,13 @@ export default async function RootLayout({ children }: { children: ReactNode }) 
   const theme = parseTheme((await cookies()).get(THEME_COOKIE)?.value);
   const actor = await actorOfHeader();
   return (
-    <html lang="en-GB" className={fontClasses} data-theme={theme === 'system' ? undefined : theme}>
+    // The attribute tells the router to jump to the top of another page: gliding there, it would stop half-way.
+    <html
+      lang="en-GB"
+      className={fontClasses}
+      data-theme={theme === 'system' ? undefined : theme}
+      data-scroll-behavior="smooth"
+    >
       <body className="flex flex-col">
         <SkipLink />
         <SiteHeader actor={actor} signOut={signOutAction} />

@@ -10,6 +10,7 @@ import { mkdirSync } from 'node:fs';
 import path from 'node:path';
 import { type Client, createClient } from '@libsql/client';
 import { drizzle, type LibSQLDatabase } from 'drizzle-orm/libsql';
+import { hideValuesOfFailedQueries } from '@/db/hide-values';
 import { env } from '@/lib/env';
 
 /** Milliseconds for which a write waits for another process on the same file. */
@@ -30,6 +31,8 @@ interface Connections {
 const KEY = Symbol.for('curvekeep.database');
 // Next bundles route handlers apart from the server; both must meet the same mutex, so it hangs on globalThis.
 const shared = globalThis as typeof globalThis & { [KEY]?: Promise<Connections> };
+
+hideValuesOfFailedQueries();
 
 /** The database for reading. Nothing is written through it. */
 export async function readDatabase(): Promise<Database> {

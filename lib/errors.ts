@@ -57,7 +57,7 @@ export const ERRORS = {
   },
   stale: {
     status: 412,
-    title: 'Changed by somebody else meanwhile',
+    title: 'Changed meanwhile',
     meaning: 'If-Match names another version than the present one; load it again and repeat the change.',
   },
   'incomplete-body': {
@@ -79,6 +79,16 @@ export const ERRORS = {
     status: 415,
     title: 'The body must be application/json',
     meaning: 'Send the document with the header Content-Type: application/json, uncompressed.',
+  },
+  'not-plain-file': {
+    status: 415,
+    title: 'Send the file itself',
+    meaning: 'The body is the bytes of the file and nothing else, not a form (multipart/form-data).',
+  },
+  'empty-file': {
+    status: 422,
+    title: 'The file is empty',
+    meaning: 'A file of no bytes is not kept: it is most often one that was not sent.',
   },
   'invalid-document': {
     status: 422,
@@ -113,17 +123,17 @@ export const ERRORS = {
   'too-many-calls': {
     status: 429,
     title: 'Too many calls',
-    meaning: 'This address used up its calls for the minute; Retry-After says when there are more.',
+    meaning: 'The calls for the minute are used up; Retry-After says when there are more.',
   },
   'too-many-points': {
     status: 429,
     title: 'Too many points',
-    meaning: 'This address used up its points for the minute; Retry-After says when there are enough.',
+    meaning: 'The points for the minute are used up; Retry-After says when there are enough.',
   },
   'too-many-at-once': {
     status: 429,
     title: 'Too many at once',
-    meaning: 'Other calls of this address are still being computed; wait for their answers.',
+    meaning: 'Other calls of yours are still being computed; wait for their answers.',
   },
   unexpected: {
     status: 500,
@@ -154,6 +164,8 @@ export interface Failure {
   /** what would be right here; the general meaning where left out */
   detail?: string;
   members?: Pick<Problem, 'line' | 'column' | 'errors'>;
+  /** after how many seconds it may work */
+  retryAfterSeconds?: number;
 }
 
 /** What a verb comes to where it fails. */
@@ -189,6 +201,7 @@ export function problemOf({ code, detail, members }: Failure): Problem {
 /** The failure as an HTTP answer: the one place where a code becomes a status. */
 export function problemResponse(failure: Failure, headers: Record<string, string> = {}): Response {
   const problem = problemOf(failure);
+  const { retryAfterSeconds } = failure;
   return new Response(JSON.stringify(problem), {
     status: problem.status,
     headers: {
@@ -196,6 +209,7 @@ export function problemResponse(failure: Failure, headers: Record<string, string
       'Cache-Control': 'no-store',
       // RFC 9110, 11.6.1: a 401 says how to identify oneself.
       ...(problem.status === 401 ? { 'WWW-Authenticate': 'Bearer realm="Curvekeep"' } : {}),
+      ...(retryAfterSeconds === undefined ? {} : { 'Retry-After': String(retryAfterSeconds) }),
       ...headers,
     },
   });

@@ -1,5 +1,6 @@
 /** The one logger: JSON lines on standard output, with everything that identifies or authorises taken out. */
 import pino, { type DestinationStream, type Logger } from 'pino';
+import { describeError } from '@/lib/describe-error';
 import { env } from '@/lib/env';
 
 const KEY = Symbol.for('curvekeep.log');
@@ -29,6 +30,9 @@ export function createLogger(level: string, destination?: DestinationStream): Lo
     const member = field.startsWith('[') ? field : `.${field}`;
     return [field, `headers${member}`, `*.headers${member}`];
   });
-  const options = { level, base: { app: 'curvekeep' }, redact: { paths, remove: true } };
+  const options = {
+    ...{ level, base: { app: 'curvekeep' }, redact: { paths, remove: true } },
+    serializers: { err: (error: unknown) => describeError(error) },
+  };
   return destination ? pino(options, destination) : pino(options);
 }

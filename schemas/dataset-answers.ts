@@ -150,7 +150,7 @@ export const datasetAnswerSchema = z
 export const datasetPointSchema = z
   .strictObject({
     series: z.string().meta({ description: 'Id of the series' }),
-    index: z.int(),
+    index: z.int().meta({ description: 'Place in the series, from 0, as in the document' }),
     ligands: z.record(z.string(), z.number()).meta({ description: 'In the units of the document' }),
     modulators: z.record(z.string(), z.number()),
     energy: z.number(),
@@ -174,6 +174,13 @@ export const datasetPointsSchema = z
     accession: z.string(),
     revision: z.int(),
     note: z.string().nullable(),
+    units: z
+      .strictObject({
+        energy: z.literal('kT'),
+        ligands: z.record(z.string(), z.string()),
+        modulators: z.record(z.string(), z.string()),
+      })
+      .meta({ id: 'PointUnits', description: 'Of energies, and of ligands and modulators by id' }),
     points: z.array(datasetPointSchema),
   })
   .meta({ id: 'DatasetPoints' });
@@ -186,6 +193,7 @@ export const tombstoneSchema = z
     system: namedSchema,
     publishedAt: time,
     withdrawnAt: time,
+    reason: z.string().nullable().meta({ description: 'Why; null where none is on record' }),
   })
   .meta({ id: 'Tombstone' });
 

@@ -9,3 +9,6 @@ export const DEPOSIT_STATES = [
   'declined',
   'withdrawn',
 ] as const;
+
+/** What a curator can decide. */
+export const DECISION_KINDS = ['accepted', 'changes-requested', 'declined'] as const;

@@ -1,11 +1,22 @@
 /** A deposit as the API sends it, and the parameters of its calls. */
 import { z } from 'zod';
-import { DEPOSIT_STATES } from './deposit-states';
+import { DECISION_KINDS, DEPOSIT_STATES } from './deposit-states';
 import { documentErrorSchema } from './problem';
+import { isTimeZone } from './time-zone';
 
 export const depositStateSchema = z.enum(DEPOSIT_STATES).meta({ id: 'DepositState' });
 
 const instant = z.iso.datetime().meta({ description: 'UTC, ISO 8601' });
+
+export const publicationDaySchema = z
+  .strictObject({
+    day: z.iso.date('must be a day like 2027-03-01').meta({ description: 'Published at its first midnight' }),
+    timeZone: z
+      .string()
+      .refine(isTimeZone, 'must be the name of a time zone, such as Europe/Oslo')
+      .meta({ description: 'Whose midnight: an IANA time zone', example: 'Europe/Oslo' }),
+  })
+  .meta({ id: 'PublicationDay' });
 
 const headShape = {
   id: z.string(),
@@ -18,6 +29,13 @@ const headShape = {
   errorCount: z.int(),
   createdAt: instant,
   updatedAt: instant,
+  updatedBy: z
+    .string()
+    .nullable()
+    .meta({ description: 'Person or token of the laboratory that made the last change; null: a curator' }),
+  publication: publicationDaySchema
+    .nullable()
+    .meta({ description: 'Of an accepted deposit: the day of its publication; null: at once' }),
   links: z.strictObject({
     self: z.string(),
     submission: z.string(),
@@ -50,7 +68,7 @@ const revisionSchema = z
 const pastDecisionSchema = z
   .strictObject({
     revision: z.int(),
-    kind: z.enum(['accepted', 'changes-requested']),
+    kind: z.enum(DECISION_KINDS),
     letter: z.string(),
     decidedAt: instant,
   })
@@ -78,17 +96,48 @@ export const submittedDepositSchema = z
 export const depositListSchema = z
   .strictObject({
     deposits: z.array(depositHeadSchema),
-    next: z.string().nullable().meta({ description: 'Where the next page is; null on the last' }),
+    next: z.string().nullable().meta({ description: 'Address of the next page; null on the last one' }),
   })
   .meta({ id: 'DepositList' });
 
-/** The parameters of the list. */
-export const depositQuerySchema = z.object({
-  state: depositStateSchema.optional(),
-  cursor: z.string().max(200).optional(),
-  limit: z.coerce.number().int().min(1).max(100).optional(),
+/** The parameters of the list, each at most once. */
+export const depositQuerySchema = z.strictObject({
+  state: z
+    .enum(DEPOSIT_STATES, { error: `must be one of ${DEPOSIT_STATES.join(', ')}` })
+    .optional()
+    .meta({ description: 'Deposits in that state' }),
+  cursor: z
+    .string()
+    .regex(/^[\w-]{1,200}$/, 'must be the cursor of an earlier answer')
+    .optional()
+    .meta({ description: 'Where the page begins; part of `next` of the page before' }),
+  limit: z
+    .string()
+    .regex(/^([1-9]\d?|100)$/, 'must be a whole number from 1 to 100')
+    .transform(Number)
+    .optional()
+    .meta({ description: 'How many a page, 1 to 100; 50 where left out' }),
 });
 
+type DepositQuery = z.output<typeof depositQuerySchema>;
+
+/** The parameters of an address; where one is wrong, a sentence that names it and says what would be right. */
+export function readDepositQuery(
+  parameters: URLSearchParams,
+): { ok: true; query: DepositQuery } | { ok: false; detail: string } {
+  const names = [...parameters.keys()];
+  const repeated = names.find((name, i) => names.indexOf(name) !== i);
+  if (repeated !== undefined)
+    return { ok: false, detail: `The parameter ${repeated.slice(0, 50)} can be given only once.` };
+  const parsed = depositQuerySchema.safeParse(Object.fromEntries(parameters));
+  if (parsed.success) return { ok: true, query: parsed.data };
+  const [issue] = parsed.error.issues;
+  if (issue?.code === 'unrecognized_keys')
+    return { ok: false, detail: `There is no parameter “${issue.keys[0]?.slice(0, 50)}” here.` };
+  return { ok: false, detail: `The parameter ${String(issue?.path[0])} ${issue?.message}.` };
+}
+
+export type PublicationDay = z.infer<typeof publicationDaySchema>;
 export type DepositHeadAnswer = z.infer<typeof depositHeadSchema>;
 export type SavedDepositAnswer = z.infer<typeof savedDepositSchema>;
 export type DepositAnswer = z.infer<typeof depositSchema>;

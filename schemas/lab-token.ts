@@ -1,5 +1,6 @@
 /** What the form for a new laboratory token sends. */
 import { z } from 'zod';
+import { isPlainText, UNPLAIN } from './plain-text';
 
 /** How long a token may live at most, days. */
 export const MOST_TOKEN_DAYS = 365;
@@ -9,7 +10,8 @@ export const labTokenSchema = z.object({
     .string()
     .trim()
     .min(1, 'Enter a name of 1 to 80 characters.')
-    .max(80, 'Enter a name of 1 to 80 characters.'),
+    .max(80, 'Enter a name of 1 to 80 characters.')
+    .refine(isPlainText, `The name ${UNPLAIN}.`),
   scopes: z
     .array(
       z.enum(['read-drafts', 'write-drafts', 'submit']),

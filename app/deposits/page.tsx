@@ -4,9 +4,11 @@ import { NewDraft } from '@/components/deposits/new-draft';
 import { actorOfPage } from '@/lib/auth/current-actor';
 import { formatAccession } from '@/lib/datasets/accession';
 import { listDepositsWithCounts } from '@/lib/deposits/list-deposits-with-counts';
+import { publicationOf } from '@/lib/deposits/write-answer';
 import { depositStateSchema } from '@/schemas/deposit';
 import { DEPOSIT_STATES } from '@/schemas/deposit-states';
-import { turnAway } from './turn-away';
+import { turnAway } from '../turn-away';
+import { systemNames } from './system-choices';
 
 export const metadata: Metadata = { title: 'Deposits', robots: { index: false } };
 
@@ -22,12 +24,15 @@ export default async function DepositsPage({ searchParams }: DepositsPageProps) 
   const place = typeof cursor === 'string' ? cursor : undefined;
   const listed = await listDepositsWithCounts({ actor, state, cursor: place });
   if (!listed.ok) return turnAway(listed.failure, '/deposits');
+  const nameOf = await systemNames(actor);
   const labs = actor.kind === 'person' ? actor.memberships : [];
   return (
     <DepositList
       deposits={listed.deposits.map(({ accession, ...deposit }) => ({
         ...deposit,
+        system: nameOf(deposit.system),
         accession: accession === null ? null : formatAccession(accession),
+        publication: publicationOf(deposit),
       }))}
       state={state ?? null}
       states={DEPOSIT_STATES}

@@ -1,10 +1,11 @@
 import type { Metadata } from 'next';
-import { redirect } from 'next/navigation';
 import { LabColumns } from '@/components/lab/lab-columns';
 import { DeadEnd } from '@/components/layout/dead-end';
 import { ActionLink } from '@/components/ui/action-link';
 import { actorOfPage } from '@/lib/auth/current-actor';
 import { listOwnLabs } from '@/lib/labs/list-own-labs';
+import { answerWithStatus } from '@/lib/serving/late-answer';
+import { turnAway } from '../turn-away';
 import { createTokenAction } from './create-token-action';
 import { revokeTokenAction } from './revoke-token-action';
 
@@ -13,8 +14,9 @@ export const metadata: Metadata = { title: 'Laboratory', robots: { index: false 
 /** The person's laboratories from within; for an administrator all of them. */
 export default async function LabPage() {
   const actor = await actorOfPage();
-  if (actor.kind === 'visitor') redirect('/sign-in?next=/lab');
   const listed = await listOwnLabs(actor);
+  if (!listed.ok && listed.failure.code !== 'forbidden') return turnAway(listed.failure, '/lab');
+  if (!listed.ok) answerWithStatus(403);
   if (!listed.ok || listed.labs.length === 0) return <NoLaboratory />;
   const alone = listed.labs.length === 1;
   return (

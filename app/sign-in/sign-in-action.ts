@@ -21,7 +21,9 @@ export async function signInAction(_: SignInState, form: FormData): Promise<Sign
   if (outcome.ok) {
     const { name, value, attributes } = outcome.cookie;
     jar.set(name, value, attributes);
-    redirect(safeNext(form.get('next')) as Route);
+    const next = safeNext(form.get('next'));
+    // The sign-in page knows by then who it is, and where their work waits.
+    redirect((next === '/' ? '/sign-in' : next) as Route);
   }
   const { detail, errors = [] } = problemOf(outcome.failure);
   const at = (pointer: string) => errors.find((error) => error.pointer === pointer)?.detail;

@@ -2,12 +2,12 @@
 
 import { useMutation } from '@tanstack/react-query';
 import { useEffect, useRef, useState } from 'react';
+import { AssessedView, type Look } from '@/components/assessed/assessed-view';
 import type { DepositingLab } from '@/components/deposits/lab-choice';
 import { openingWindow } from '@/components/plots/energy-window';
 import { type PlotData, pointsOf } from '@/components/plots/plot-data';
 import { readCsvPoints } from '@/lib/documents/read-csv-points';
 import { assessSource, type SourceOutcome } from './assess-source';
-import { AssessedView, type Look } from './assessed-view';
 import { type CsvDraft, draftFor } from './csv-draft';
 import { DatasetHead } from './dataset-head';
 import { type ExampleSlug, loadExample, loadExampleTable } from './example-words';
@@ -140,7 +140,7 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
       onRefused={(detail) => setOutcome({ kind: 'refused', title: 'This file was not taken', detail })}
       onAssess={() => mutate({ source, draft, example })}
       onExample={(slug) => void open(slug)}
-      onTable={() => void openTable()}
+      onTable={openTable}
       onResult={() => setEditing(false)}
       keep={keep}
     />

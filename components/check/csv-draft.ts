@@ -1,4 +1,6 @@
 /** The form beside a table of points, as it is typed: every number is text until it is read. */
+
+import { readNumber } from '@/components/ui/read-number';
 import type { CsvPoints } from '@/lib/documents/read-csv-points';
 import {
   type ConcentrationUnit,
@@ -10,7 +12,6 @@ import {
   type TemperatureUnit,
 } from '@/lib/engine/units';
 import type { CsvParametersInput } from '@/schemas/csv-parameters';
-import { readNumber } from './read-number';
 
 export interface ConstantDraft {
   value: string;

@@ -1,10 +1,10 @@
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
+import { FormRow } from '@/components/ui/form-row';
+import { InlineQuantity } from '@/components/ui/inline-quantity';
+import { InlineSelect } from '@/components/ui/inline-select';
 import type { CsvPoints } from '@/lib/documents/read-csv-points';
 import type { CsvDraft, ParametersDraft } from './csv-draft';
-import { FormRow } from './form-row';
-import { InlineQuantity } from './inline-quantity';
-import { InlineSelect } from './inline-select';
 import { ParametersForm } from './parameters-form';
 
 interface CsvFormProps {

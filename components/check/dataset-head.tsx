@@ -2,8 +2,8 @@ import type { ReactNode } from 'react';
 import type { PlotData } from '@/components/plots/plot-data';
 import { Button } from '@/components/ui/button';
 import { Disclosure } from '@/components/ui/disclosure';
+import { saveFile } from '@/components/ui/save-file';
 import { NOT_STATED } from './csv-draft';
-import { saveFile } from './save-file';
 
 interface DatasetHeadProps {
   data: PlotData;
@@ -25,7 +25,7 @@ export function DatasetHead({ data, invented, onEdit, keep }: DatasetHeadProps) 
       <p className="mt-2 flex flex-wrap gap-x-5">
         <Button onClick={onEdit}>Change the data</Button>
         <Button onClick={() => saveFile('assessment.json', JSON.stringify(assessment, null, 2))}>
-          Save assessment
+          Assessment as a file
         </Button>
       </p>
       {keep}

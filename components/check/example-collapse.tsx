@@ -1,13 +1,13 @@
 'use client';
 
 import { useState } from 'react';
+import { CollapseSwitch } from '@/components/assessed/collapse-switch';
+import { sentenceOn } from '@/components/assessed/summary-sentence';
 import { CollapsePanel } from '@/components/plots/collapse-panel';
 import { openingWindow } from '@/components/plots/energy-window';
 import { plotDataOf, pointsOf } from '@/components/plots/plot-data';
 import type { Assessment } from '@/lib/engine/assessment';
 import type { DatasetDocument } from '@/schemas/dataset-1.generated';
-import { CollapseSwitch } from './collapse-switch';
-import { sentenceOn } from './summary-sentence';
 
 interface ExampleCollapseProps {
   document: DatasetDocument;

@@ -1,3 +1,7 @@
+import { ORIENTATION_WORDS, ORIGIN_WORDS } from '@/components/assessed/statement-words';
+import { FormRow } from '@/components/ui/form-row';
+import { InlineQuantity } from '@/components/ui/inline-quantity';
+import { InlineSelect } from '@/components/ui/inline-select';
 import { unitLabel } from '@/components/ui/unit-label';
 import type { CsvPoints } from '@/lib/documents/read-csv-points';
 import {
@@ -14,10 +18,6 @@ import {
   RATIO_ORIENTATIONS,
 } from '@/lib/engine/units';
 import type { ConstantDraft, ParametersDraft } from './csv-draft';
-import { FormRow } from './form-row';
-import { InlineQuantity } from './inline-quantity';
-import { InlineSelect } from './inline-select';
-import { ORIENTATION_WORDS, ORIGIN_WORDS } from './statement-words';
 
 interface ParametersFormProps {
   draft: ParametersDraft;

@@ -5,6 +5,7 @@ import { type ReactNode, useDeferredValue, useRef } from 'react';
 import { AxisFrame } from '@/components/layout/axis-frame';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
+import { selectLine } from '@/components/ui/select-line';
 import { readCsvPoints } from '@/lib/documents/read-csv-points';
 import type { SourceOutcome } from './assess-source';
 import type { CsvDraft } from './csv-draft';
@@ -13,7 +14,6 @@ import { ExampleList } from './example-list';
 import type { ExampleSlug } from './example-words';
 import { ProblemList } from './problem-list';
 import { kindOf, type Source } from './read-source';
-import { selectLine } from './select-line';
 import { SourceEditor } from './source-editor';
 
 interface SourceViewProps {
@@ -28,7 +28,7 @@ interface SourceViewProps {
   onRefused: (sentence: string) => void;
   onAssess: () => void;
   onExample: (slug: ExampleSlug) => void;
-  onTable: () => void;
+  onTable: () => Promise<void>;
   onResult: () => void;
   /** the way to a draft, for those who may make one */
   keep?: ReactNode;
@@ -52,6 +52,11 @@ export function SourceView(props: SourceViewProps) {
     onTable,
   } = props;
   const area = useRef<HTMLTextAreaElement>(null);
+  // Where the columns are rows the editor stands above what was just clicked.
+  const showEditor = () => {
+    area.current?.focus({ preventScroll: true });
+    area.current?.scrollIntoView({ block: 'center' });
+  };
   // A large table is read when the typing pauses, not at every key.
   const text = useDeferredValue(source.text);
   const isTable = text.trim() !== '' && kindOf({ ...source, text }) === 'table';
@@ -114,7 +119,7 @@ export function SourceView(props: SourceViewProps) {
                 <p>{outcome.detail}</p>
               </Notice>
             ) : null}
-            <ExampleList busy={busy} onExample={onExample} onTable={onTable} />
+            <ExampleList busy={busy} onExample={onExample} onTable={() => void onTable().then(showEditor)} />
           </div>
         }
       />

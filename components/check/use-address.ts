@@ -3,8 +3,8 @@
 import { useEffect, useRef } from 'react';
 import type { EnergyWindow } from '@/components/plots/energy-window';
 import { orderedWindow } from '@/components/plots/energy-window';
+import { readNumber } from '@/components/ui/read-number';
 import { type ExampleSlug, isExampleSlug } from './example-words';
-import { readNumber } from './read-number';
 
 /** What an address can say of this page: which example, seen how. Data that somebody pasted are in no address. */
 export interface CheckAddress {

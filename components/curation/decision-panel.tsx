@@ -1,16 +1,16 @@
 'use client';
 
-import type { Route } from 'next';
 import { useRef, useState } from 'react';
 import { newKey } from '@/components/deposits/call-api';
-import { decideOn } from '@/components/deposits/deposit-calls';
+import { type Decision, decideOn } from '@/components/deposits/deposit-calls';
 import { ProblemNotice } from '@/components/deposits/problem-notice';
+import { dayWords } from '@/components/deposits/publication-words';
 import { useCall } from '@/components/deposits/use-call';
-import { ActionLink } from '@/components/ui/action-link';
 import { Button } from '@/components/ui/button';
+import { Disclosure } from '@/components/ui/disclosure';
 import { CONTROL_STYLE, Field } from '@/components/ui/field';
-import { Notice } from '@/components/ui/notice';
-import type { DepositHeadAnswer } from '@/schemas/deposit';
+import { Decided } from './decided';
+import { type LaterDay, LaterPublication } from './later-publication';
 
 interface DecisionPanelProps {
   id: string;
@@ -18,25 +18,36 @@ interface DecisionPanelProps {
   revision: number;
 }
 
-type Kind = 'accepted' | 'changes-requested';
+type Kind = Decision['kind'];
 
-/** The letter and the two decisions; afterwards what came of it. */
+const MISSING = {
+  'changes-requested': 'Write what should be changed.',
+  declined: 'Write why it is declined.',
+};
+
+/** The letter and the three decisions; afterwards what came of it. */
 export function DecisionPanel({ id, revision }: DecisionPanelProps) {
   const [letter, setLetter] = useState('');
-  const [missing, setMissing] = useState(false);
+  const [missing, setMissing] = useState<string>();
+  const [later, setLater] = useState<LaterDay>({ day: '', timeZone: 'UTC' });
   const key = useRef(newKey());
   const { mutate, isPending, data, error, variables } = useCall({
-    mutationFn: (kind: Kind) => decideOn(id, { kind, letter, revision }, key.current),
+    mutationFn: (kind: Kind) => {
+      const publication = kind === 'accepted' && later.day !== '' ? later : undefined;
+      return decideOn(id, { kind, letter, revision, publication }, key.current);
+    },
     onError: () => {
       key.current = newKey();
     },
   });
   if (data) return <Decided deposit={data} />;
-  const ask = () => {
+  const answer = (kind: keyof typeof MISSING) => {
     const isEmpty = letter.trim() === '';
-    setMissing(isEmpty);
-    if (!isEmpty) mutate('changes-requested');
+    setMissing(isEmpty ? MISSING[kind] : undefined);
+    if (!isEmpty) mutate(kind);
   };
+  const words = (kind: Kind, idle: string, busy: string) => (isPending && variables === kind ? busy : idle);
+  const accept = later.day === '' ? 'Accept and publish' : `Accept, publish on ${dayWords(later.day)}`;
   return (
     <section aria-label="Decision">
       <h2 className="font-semibold">Decision on revision {revision}</h2>
@@ -44,7 +55,7 @@ export function DecisionPanel({ id, revision }: DecisionPanelProps) {
         className="mt-3"
         label="Letter to the depositors"
         hint="what should be changed and why; with an acceptance it may stay empty"
-        error={missing ? 'Write what should be changed.' : undefined}
+        error={missing}
       >
         {(tie) => (
           <textarea
@@ -54,50 +65,33 @@ export function DecisionPanel({ id, revision }: DecisionPanelProps) {
             value={letter}
             onChange={({ target }) => {
               setLetter(target.value);
-              setMissing(false);
+              setMissing(undefined);
             }}
             className={`${CONTROL_STYLE} resize-y bg-wash px-2 py-1.5 font-serif`}
           />
         )}
       </Field>
       <div className="mt-3 flex flex-col items-start gap-2">
-        <Button disabled={isPending} onClick={ask}>
-          {isPending && variables === 'changes-requested' ? 'Sending …' : 'Ask for changes'}
+        <Button disabled={isPending} onClick={() => answer('changes-requested')}>
+          {words('changes-requested', 'Ask for changes', 'Sending …')}
         </Button>
         <Button variant="primary" disabled={isPending} onClick={() => mutate('accepted')}>
-          {isPending && variables === 'accepted' ? 'Publishing …' : 'Accept and publish'}
+          {words('accepted', accept, 'Accepting …')}
         </Button>
       </div>
+      <LaterPublication later={later} onLater={setLater} />
+      <Disclosure summary="Decline" className="mt-3">
+        <p className="text-sm">
+          That is final: a declined deposit can neither be changed nor submitted again. The laboratory reads
+          your letter and may begin a new draft from the document.
+        </p>
+        <Button className="mt-1" disabled={isPending} onClick={() => answer('declined')}>
+          {words('declined', 'Decline it for good', 'Declining …')}
+        </Button>
+      </Disclosure>
       <div className="mt-3 empty:hidden">
         <ProblemNotice error={error} />
       </div>
     </section>
-  );
-}
-
-function Decided({ deposit: { state, accession } }: { deposit: DepositHeadAnswer }) {
-  const queue = (
-    <ActionLink href="/curation" prefetch={false}>
-      Back to the queue
-    </ActionLink>
-  );
-  if (state === 'published' && accession) {
-    return (
-      <Notice kind="note" title={`Published as ${accession}`} live>
-        <p>It lies on the master curve with everything else that is published.</p>
-        <p className="flex flex-col items-start gap-1.5">
-          <ActionLink href={`/datasets/${accession}` as Route} prefetch={false}>
-            Open {accession}
-          </ActionLink>
-          {queue}
-        </p>
-      </Notice>
-    );
-  }
-  return (
-    <Notice kind="note" title="The letter is sent" live>
-      <p>The laboratory sees it with the deposit, changes it, and submits its next revision.</p>
-      <p>{queue}</p>
-    </Notice>
   );
 }

@@ -25,11 +25,14 @@ interface ReviewProps {
 export function Review({ deposit, document, assessment, files, mayDecide }: ReviewProps) {
   const { id, state, revisions, decisions, laboratory } = deposit;
   const revision = revisions[0];
+  const decides = mayDecide && awaitsDecision(state);
   return (
     <AssessedRecord
       document={document}
       assessment={assessment}
       laboratory={laboratory.name}
+      state={state}
+      toDo={decides ? 'Decide' : undefined}
       aside={
         <>
           {revision ? (
@@ -38,7 +41,7 @@ export function Review({ deposit, document, assessment, files, mayDecide }: Revi
               {state === 'submitted' ? null : `; ${stateWords(state)}`}
             </p>
           ) : null}
-          {revision && mayDecide && awaitsDecision(state) ? (
+          {revision && decides ? (
             <DecisionPanel key={revision.number} id={id} revision={revision.number} />
           ) : (
             <Notice kind="note" title={mayDecide ? 'Nothing to decide' : 'Another curator decides'}>

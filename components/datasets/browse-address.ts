@@ -38,6 +38,23 @@ export function readBrowseAddress(parameters: Pick<URLSearchParams, 'get' | 'get
   };
 }
 
+/** What is wrong with the window that an address asks for, as a sentence; null where nothing is. */
+export function windowSlip(parameters: Pick<URLSearchParams, 'get'>): string | null {
+  const bad = (['from', 'to'] as const).find(
+    (name) => (parameters.get(name)?.trim() ?? '') !== '' && energyIn(parameters, name) === null,
+  );
+  if (bad !== undefined)
+    return `“${bad}=${shortened(parameters.get(bad) ?? '')}” in the address is no energy in kT and was left out.`;
+  const [from, to] = [energyIn(parameters, 'from'), energyIn(parameters, 'to')];
+  return from === null || to === null || from < to
+    ? null
+    : 'The window in the address ends before it begins, so all energies are shown. Its “from” must be the lower one.';
+}
+
+function shortened(text: string): string {
+  return text.length <= 20 ? text : `${text.slice(0, 20)}…`;
+}
+
 /** The parameters that say so, in one order: equal selections have equal addresses. */
 export function writeBrowseAddress(filters: DatasetFilters): URLSearchParams {
   const parameters = new URLSearchParams();

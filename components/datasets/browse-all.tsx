@@ -1,5 +1,7 @@
 'use client';
 
+import { signedLabel } from '@/components/plots/axis-ruler';
+import type { EnergyWindow } from '@/components/plots/energy-window';
 import { formatCount } from '@/components/ui/format-quantity';
 import { BrowseWorkspace } from './browse-workspace';
 
@@ -7,9 +9,9 @@ import { BrowseWorkspace } from './browse-workspace';
 export function BrowseAll() {
   return (
     <BrowseWorkspace
-      head={(datasets) => (
+      head={(datasets, window) => (
         <>
-          <h1 className="head text-3xl">{titleOf(datasets)}</h1>
+          <h1 className="head text-3xl">{titleOf(datasets, window)}</h1>
           <p className="mt-2 text-lg text-soft leading-snug">
             Activity against the free-energy coordinate that each laboratory’s own parameters predict.
           </p>
@@ -19,8 +21,10 @@ export function BrowseAll() {
   );
 }
 
-function titleOf(datasets: number | null): string {
+function titleOf(datasets: number | null, window: EnergyWindow | null): string {
   if (datasets === null) return 'Datasets on one curve';
   if (datasets === 0) return 'No dataset fits';
-  return `${formatCount(datasets)} ${datasets === 1 ? 'dataset' : 'datasets'}, one curve`;
+  const counted = `${formatCount(datasets)} ${datasets === 1 ? 'dataset' : 'datasets'}`;
+  if (window === null) return `${counted}, one curve`;
+  return `${counted} from ${signedLabel(window.from)} to ${signedLabel(window.to)}\u00a0kT`;
 }

@@ -1,12 +1,10 @@
 'use client';
 
-import { useRouter } from 'next/navigation';
-import { type ReactNode, useRef, useState } from 'react';
+import { type ReactNode, useRef } from 'react';
 import { AxisFrame } from '@/components/layout/axis-frame';
 import { RowFrame } from '@/components/layout/row-frame';
 import { ScrollingCell } from '@/components/layout/scrolling-cell';
 import type { EnergyWindow } from '@/components/plots/energy-window';
-import { OverlayPanel } from '@/components/plots/overlay-panel';
 import { RowHeads } from '@/components/plots/row-figures';
 import { useSize } from '@/components/plots/use-size';
 import { WindowRuler } from '@/components/plots/window-ruler';
@@ -15,37 +13,34 @@ import type { DatasetFilters } from '@/schemas/dataset-query';
 import { browseWindows, pointsOutside, windowForAddress } from './browse-window';
 import { collectionSentence, counted } from './collection-sentence';
 import { CollectionVerdict } from './collection-verdict';
-import { DatasetRow } from './dataset-row';
+import { DatasetRows } from './dataset-rows';
 import { EnergyTable } from './energy-table';
 import { FilterPanel } from './filter-panel';
 import { NothingFits } from './nothing-fits';
 import { OffCurveTable } from './off-curve-table';
+import { OverlayColumn } from './overlay-column';
 import { ReadFailure } from './read-failure';
 import { useBrowseAddress } from './use-browse-address';
-import { useDatasetList, useLitPoints, useOverlay } from './use-collection';
+import { useDatasetList, useOverlay } from './use-collection';
+import { useLighting } from './use-lighting';
 
 interface BrowseWorkspaceProps {
   /** slug of the laboratory whose datasets alone are shown */
   lab?: string;
   /** above the filters: whose datasets these are */
-  head: (datasets: number | null) => ReactNode;
+  head: (datasets: number | null, window: EnergyWindow | null) => ReactNode;
 }
 
 /** Published datasets on one curve: filters, overlay on the axis, verdict; a strip a dataset below, newest first. */
 export function BrowseWorkspace({ lab, head }: BrowseWorkspaceProps) {
-  const router = useRouter();
-  const { filters: asked, go: goTo } = useBrowseAddress();
+  const { filters: asked, slip, go: goTo } = useBrowseAddress();
   const filters: DatasetFilters = lab === undefined ? asked : { ...asked, lab: [lab] };
   const go = (next: DatasetFilters) => goTo(lab === undefined ? next : { ...next, lab: [] });
   const list = useDatasetList(filters);
   const overlay = useOverlay(filters);
   const column = useRef<HTMLDivElement>(null);
   const { width } = useSize(column);
-  /** the dataset whose row is pointed at: its points are lit */
-  const [lit, setLit] = useState<string | null>(null);
-  /** the dataset of the point that is pointed at: its row is lit */
-  const [pointed, setPointed] = useState<string | null>(null);
-  const litPoints = useLitPoints(lit, overlay.shown);
+  const lighting = useLighting(overlay.shown);
 
   const pages = list.data?.pages ?? [];
   const first = pages.at(0);
@@ -55,32 +50,36 @@ export function BrowseWorkspace({ lab, head }: BrowseWorkspaceProps) {
   const setWindow = (next: EnergyWindow) => go({ ...filters, ...windowForAddress(next, opening) });
   const ruler = <WindowRuler window={window} full={full} onChange={setWindow} />;
   const total = first?.total;
+  const isWindow = filters.from !== null || filters.to !== null;
   return (
     <>
       <AxisFrame
         who={
           <ScrollingCell label="Datasets and filters">
-            {head(total?.datasets ?? null)}
+            {head(total?.datasets ?? null, isWindow ? window : null)}
+            {slip === null ? null : (
+              <p role="status" className="mt-2 text-sm text-warn">
+                {slip}
+              </p>
+            )}
+            <a
+              href="#datasets"
+              className="sr-only focus:not-sr-only focus:mt-2 focus:inline-block focus:font-semibold focus:text-act"
+            >
+              Skip search and filters, to the datasets
+            </a>
             {first ? <FilterPanel filters={filters} facets={first.facets} fixed={fixed} onGo={go} /> : null}
           </ScrollingCell>
         }
         axis={
-          <div ref={column} className="flex h-full flex-col">
-            {overlay.error && overlay.shown === null ? (
-              <div className="p-4">
-                <ReadFailure what="The points" error={overlay.error} onRetry={() => void overlay.retry()} />
-              </div>
-            ) : null}
-            <OverlayPanel
-              overlay={overlay.shown}
-              window={window}
-              lit={litPoints}
-              sentence={total ? collectionSentence(total, window) : 'The master curve'}
-              onPoint={setPointed}
-              onChoose={(accession) => router.push(`/datasets/${accession}`)}
-            />
-            <div className="border-ink border-y lg:hidden">{ruler}</div>
-          </div>
+          <OverlayColumn
+            column={column}
+            overlay={overlay}
+            window={window}
+            lighting={lighting}
+            sentence={total ? collectionSentence(total, window) : 'The master curve'}
+            ruler={ruler}
+          />
         }
         verdict={
           total ? (
@@ -89,7 +88,7 @@ export function BrowseWorkspace({ lab, head }: BrowseWorkspaceProps) {
                 total={total}
                 window={window}
                 full={full}
-                isWindow={filters.from !== null || filters.to !== null}
+                isWindow={isWindow}
                 outside={overlay.whole ? pointsOutside(overlay.whole, window) : 0}
                 onWindow={setWindow}
               />
@@ -102,7 +101,7 @@ export function BrowseWorkspace({ lab, head }: BrowseWorkspaceProps) {
           className="max-lg:[&>:first-child]:hidden max-lg:[&>:last-child]:hidden"
           who={<p className="py-1.5 text-sm text-soft">Newest first</p>}
           axis={ruler}
-          verdict={<RowHeads />}
+          verdict={<RowHeads isWindow={isWindow} />}
         />
         {list.error ? (
           <div className="py-6">
@@ -112,22 +111,14 @@ export function BrowseWorkspace({ lab, head }: BrowseWorkspaceProps) {
         {first && datasets.length === 0 ? (
           <NothingFits filters={filters} facets={first.facets} fixed={fixed} onGo={go} />
         ) : null}
-        <ul
-          aria-label="Datasets, newest first"
-          aria-busy={list.isPlaceholderData}
-          className={list.isPlaceholderData ? 'opacity-60' : ''}
-        >
-          {datasets.map((dataset) => (
-            <DatasetRow
-              key={dataset.accession}
-              dataset={dataset}
-              window={window}
-              width={width}
-              lit={lit === dataset.accession || pointed === dataset.accession}
-              onLight={(on) => setLit(on ? dataset.accession : null)}
-            />
-          ))}
-        </ul>
+        <DatasetRows
+          datasets={datasets}
+          window={window}
+          width={width}
+          lighting={lighting}
+          isWindow={isWindow}
+          isPast={list.isPlaceholderData}
+        />
         {list.hasNextPage ? (
           <p className="py-3">
             <Button disabled={list.isFetchingNextPage} onClick={() => void list.fetchNextPage()}>

@@ -1,5 +1,5 @@
-import { FlagCounts } from '@/components/check/flag-counts';
-import { WindowFields } from '@/components/check/window-fields';
+import { FlagCounts } from '@/components/assessed/flag-counts';
+import { WindowFields } from '@/components/assessed/window-fields';
 import type { EnergyWindow } from '@/components/plots/energy-window';
 import { formatCount } from '@/components/ui/format-quantity';
 import { expectedByChance } from '@/lib/engine/flags';
@@ -57,7 +57,8 @@ export function CollectionVerdict(props: CollectionVerdictProps) {
 }
 
 function sentenceOnWindow(isWindow: boolean, outside: number): string {
-  if (isWindow) return `The counts are those of the window; ${counted(outside, 'more point')} outside.`;
+  if (isWindow)
+    return `Counts are of the points in the window; ${counted(outside, 'more point')} outside. RMS z and p of a row are of its whole dataset.`;
   const beyond =
     outside === 0 ? '' : ` ${counted(outside, 'more point')} beyond the axis, where the curve is flat.`;
   return `All energies are counted.${beyond} Drag along the axis to narrow them.`;

@@ -1,10 +1,13 @@
 'use client';
 
-import { AssessedView } from '@/components/check/assessed-view';
+import { useSearchParams } from 'next/navigation';
+import { AssessedView } from '@/components/assessed/assessed-view';
 import { CurveOutline } from '@/components/plots/curve-outline';
 import type { EnergyWindow } from '@/components/plots/energy-window';
 import type { DatasetAnswer } from '@/schemas/dataset-answers';
 import { DatasetRecord } from './dataset-record';
+import { MarkedPoint } from './marked-point';
+import { readPoint } from './point-address';
 import { PublishedHead } from './published-head';
 import { type DocumentHead, publishedPlotData } from './published-plot-data';
 import { ReadFailure } from './read-failure';
@@ -28,13 +31,18 @@ export function DatasetPage({ dataset, opening }: DatasetPageProps) {
     opening,
     document.ligands.map(({ id }) => id),
   );
+  const asked = readPoint(useSearchParams().get('point'));
+  const data = publishedPlotData(document, assessment, answer?.points ?? []);
+  const marked = asked !== null && data.series[asked.series]?.assessed.points[asked.point] ? asked : null;
   return (
     <>
       <AssessedView
-        data={publishedPlotData(document, assessment, answer?.points ?? [])}
+        data={data}
         look={look}
         onLook={setLook}
         head={<PublishedHead dataset={dataset} />}
+        marked={marked}
+        aside={marked === null ? null : <MarkedPoint data={data} place={marked} />}
         flaggedFirst={assessment.summary.warning + assessment.summary.offCurve > 0}
         pending={
           answer ? undefined : (

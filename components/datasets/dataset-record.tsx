@@ -77,15 +77,17 @@ function MeasuredList({ dataset: { document } }: { dataset: PublishedRecord }) {
   }
   return (
     <dl>
-      {rows.map(([label, words]) => (
-        <div
-          key={label}
-          className="grid grid-cols-[9rem_minmax(0,1fr)] gap-x-4 border-hairline border-b py-1.5 last:border-b-0 max-sm:grid-cols-1"
-        >
-          <dt className="text-soft">{label}</dt>
-          <dd className="figures break-words">{words}</dd>
-        </div>
-      ))}
+      {rows
+        .filter(([, words]) => words.trim() !== '')
+        .map(([label, words]) => (
+          <div
+            key={label}
+            className="grid grid-cols-[9rem_minmax(0,1fr)] gap-x-4 border-hairline border-b py-1.5 last:border-b-0 max-sm:grid-cols-1"
+          >
+            <dt className="text-soft">{label}</dt>
+            <dd className="figures break-words">{words}</dd>
+          </div>
+        ))}
     </dl>
   );
 }

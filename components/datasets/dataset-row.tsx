@@ -12,11 +12,13 @@ interface DatasetRowProps {
   /** width of the axis column, pixels; 0 until it is known */
   width: number;
   lit: boolean;
+  /** whether the address names a window, in which points are counted */
+  isWindow: boolean;
   onLight: (on: boolean) => void;
 }
 
 /** A dataset as a row on the page's columns: whose, its strip, its figures. Pointing at it or focusing it lights its points. */
-export function DatasetRow({ dataset, window, width, lit, onLight }: DatasetRowProps) {
+export function DatasetRow({ dataset, window, width, lit, isWindow, onLight }: DatasetRowProps) {
   const { accession, title, lab, counts, rmsZ, pValue, fittedHere } = dataset;
   return (
     <li
@@ -58,7 +60,15 @@ export function DatasetRow({ dataset, window, width, lit, onLight }: DatasetRowP
             ) : null}
           </div>
         }
-        verdict={<RowFigures onCurve={counts.onCurve} points={counts.points} rmsZ={rmsZ} pValue={pValue} />}
+        verdict={
+          <RowFigures
+            onCurve={counts.onCurve}
+            points={counts.points}
+            rmsZ={rmsZ}
+            pValue={pValue}
+            isWindow={isWindow}
+          />
+        }
       />
     </li>
   );

@@ -1,4 +1,4 @@
-import { formatCount, formatFixed } from '@/components/ui/format-quantity';
+import { formatBytes } from '@/components/ui/format-bytes';
 import type { DatasetAnswer } from '@/schemas/dataset-answers';
 
 /** The original files, each with its size and digest. */
@@ -17,18 +17,11 @@ export function FileList({ files }: { files: DatasetAnswer['files'] }) {
             {name}
           </a>
           <span className="figures block text-sm text-soft">
-            {sizeWords(size)}, {mediaType}
+            {formatBytes(size)}, {mediaType}
           </span>
           <span className="block break-all text-soft text-xs">SHA-256 {sha256}</span>
         </li>
       ))}
     </ul>
   );
-}
-
-/** Bytes as people say them. */
-export function sizeWords(bytes: number): string {
-  if (bytes < 1024) return `${formatCount(bytes)} ${bytes === 1 ? 'byte' : 'bytes'}`;
-  const [size, unit] = bytes < 1024 ** 2 ? [bytes / 1024, 'KiB'] : [bytes / 1024 ** 2, 'MiB'];
-  return `${formatFixed(size, size < 10 ? 1 : 0)} ${unit}`;
 }

@@ -91,7 +91,7 @@ function Choice({ filters, onGo, isChosen, words, datasets }: ChoiceProps) {
       </span>
       <span className="figures ml-auto">
         {formatCount(datasets)}
-        <span className="sr-only"> datasets</span>
+        <span className="sr-only"> {datasets === 1 ? 'dataset' : 'datasets'}</span>
       </span>
     </AddressLink>
   );

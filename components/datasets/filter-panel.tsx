@@ -29,16 +29,22 @@ export function FilterPanel({ filters, facets, fixed, onGo }: FilterPanelProps) 
   const own = fixed ? { ...filters, [fixed]: [] } : filters;
   const everything = fixed ? { ...NO_FILTERS, [fixed]: filters[fixed] } : NO_FILTERS;
   const shared = { filters, onGo };
+  const isWindow = filters.from !== null || filters.to !== null;
   // On narrow screens the plot comes before a long list of choices.
   const [open, setOpen] = useState(false);
   return (
     <>
       <SearchForm {...shared} />
-      {isFiltered(own) ? (
+      {isFiltered(own) || isWindow ? (
         <p className="mt-2 flex flex-wrap gap-x-4">
           <AddressLink filters={everything} onGo={onGo} className={ACTION}>
             Show everything
           </AddressLink>
+          {isWindow && isFiltered(own) ? (
+            <AddressLink filters={{ ...filters, from: null, to: null }} onGo={onGo} className={ACTION}>
+              All energies
+            </AddressLink>
+          ) : null}
           {filters.variant.map((variant) => (
             <AddressLink
               key={variant}

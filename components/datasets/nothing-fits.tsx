@@ -23,7 +23,7 @@ export function NothingFits({ filters, facets, fixed, onGo }: NothingFitsProps) 
       <h2 className="head text-xl">No dataset fits all of that</h2>
       <p className="mt-1 text-soft">
         {ways.length > 0
-          ? 'Loosen one of these, and some may:'
+          ? 'Take one of these away, and some may fit:'
           : 'No single choice is in the way: several are. Begin again from everything.'}
       </p>
       <ul className="mt-2">

@@ -1,7 +1,7 @@
 import type { Route } from 'next';
 import Link from 'next/link';
-import { CalendarDate } from '@/components/lab/calendar-date';
 import { actionStyle } from '@/components/ui/action-style';
+import { CalendarDate } from '@/components/ui/calendar-date';
 import type { PublishedRecord } from './dataset-page';
 
 const LINK = 'inline-block min-h-6 hover:text-ink hover:underline';
@@ -16,16 +16,15 @@ export function PublishedHead({ dataset }: { dataset: PublishedRecord }) {
         {revision > 1 || !newest ? `, revision ${revision}` : ''}
       </p>
       <h1 className="head mt-0.5 break-words text-2xl">{title}</h1>
-      <p className="mt-2 flex flex-wrap gap-x-1.5 text-sm text-soft">
+      <p className="mt-2 text-sm text-soft">
         <Link href={`/labs/${lab.slug}`} prefetch={false} className={LINK}>
           {lab.name}
         </Link>
-        <span aria-hidden="true">·</span>
+        <br />
         <Link href={`/datasets?system=${system.slug}` as Route} prefetch={false} className={LINK}>
           {system.name}
         </Link>
-        <span aria-hidden="true">·</span>
-        <CalendarDate at={Date.parse(publishedAt)} />
+        , <CalendarDate at={Date.parse(publishedAt)} />
       </p>
       {newest ? null : (
         <p className="mt-2 text-sm text-warn">

@@ -1,5 +1,5 @@
 import Link from 'next/link';
-import { CalendarDate } from '@/components/lab/calendar-date';
+import { CalendarDate } from '@/components/ui/calendar-date';
 import type { DatasetAnswer } from '@/schemas/dataset-answers';
 
 interface RevisionListProps {

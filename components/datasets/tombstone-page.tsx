@@ -1,12 +1,12 @@
 import Link from 'next/link';
-import { CalendarDate } from '@/components/lab/calendar-date';
 import { DeadEnd } from '@/components/layout/dead-end';
 import { ActionLink } from '@/components/ui/action-link';
+import { CalendarDate } from '@/components/ui/calendar-date';
 import type { Tombstone } from '@/schemas/dataset-answers';
 
 /** What stays of a dataset that was withdrawn. */
 export function TombstonePage({ tombstone }: { tombstone: Tombstone }) {
-  const { accession, title, lab, system, publishedAt, withdrawnAt } = tombstone;
+  const { accession, title, lab, system, publishedAt, withdrawnAt, reason } = tombstone;
   return (
     <DeadEnd
       title="This dataset was withdrawn"
@@ -31,6 +31,7 @@ export function TombstonePage({ tombstone }: { tombstone: Tombstone }) {
         , {system.name}. Published <CalendarDate at={Date.parse(publishedAt)} />, withdrawn{' '}
         <CalendarDate at={Date.parse(withdrawnAt)} />.
       </p>
+      {reason ? <p className="whitespace-pre-wrap break-words font-serif text-ink">{reason}</p> : null}
       <p>Its data are no longer given out. The accession stays, so that citations still lead somewhere.</p>
     </DeadEnd>
   );

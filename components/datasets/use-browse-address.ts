@@ -3,7 +3,7 @@
 import { useSearchParams } from 'next/navigation';
 import { useMemo } from 'react';
 import type { DatasetFilters } from '@/schemas/dataset-query';
-import { readBrowseAddress, writeBrowseAddress } from './browse-address';
+import { readBrowseAddress, windowSlip, writeBrowseAddress } from './browse-address';
 
 /** The address of a selection on this page. */
 export function browseHref(filters: DatasetFilters): string {
@@ -16,6 +16,8 @@ export function browseHref(filters: DatasetFilters): string {
  */
 export function useBrowseAddress(): {
   filters: DatasetFilters;
+  /** what the address asks for and cannot mean; null where there is nothing */
+  slip: string | null;
   go: (next: DatasetFilters) => void;
 } {
   const parameters = useSearchParams();
@@ -26,7 +28,7 @@ export function useBrowseAddress(): {
     if (movesWindow(filters, next)) window.history.replaceState(null, '', address);
     else window.history.pushState(null, '', address);
   };
-  return { filters, go };
+  return { filters, slip: windowSlip(parameters), go };
 }
 
 function movesWindow(before: DatasetFilters, next: DatasetFilters): boolean {

@@ -1,7 +1,7 @@
 'use client';
 
 import { useSearchParams } from 'next/navigation';
-import type { Look } from '@/components/check/assessed-view';
+import type { Look } from '@/components/assessed/assessed-view';
 import { type EnergyWindow, orderedWindow } from '@/components/plots/energy-window';
 import { readBrowseAddress } from './browse-address';
 
@@ -18,19 +18,24 @@ export function useLook(opening: EnergyWindow, ligands: readonly string[]): [Loo
   const by = parameters.get('by');
   const look = { window: asked ?? opening, byLigand: by !== null && ligands.includes(by) ? by : null };
   const setLook = (next: Look) => {
-    const query = lookParameters(next, opening);
+    const query = lookParameters(next, opening, parameters.get('point'));
     window.history.replaceState(null, '', query === '' ? window.location.pathname : `?${query}`);
   };
   return [look, setLook];
 }
 
 /** The parameters that say so; none for what a dataset opens with. */
-export function lookParameters({ window: { from, to }, byLigand }: Look, opening: EnergyWindow): string {
+export function lookParameters(
+  { window: { from, to }, byLigand }: Look,
+  opening: EnergyWindow,
+  point: string | null = null,
+): string {
   const query = new URLSearchParams();
   if (from !== opening.from || to !== opening.to) {
     query.set('from', String(from));
     query.set('to', String(to));
   }
   if (byLigand !== null) query.set('by', byLigand);
+  if (point !== null) query.set('point', point);
   return String(query);
 }

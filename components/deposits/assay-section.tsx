@@ -1,4 +1,4 @@
-import { FormRow } from '@/components/check/form-row';
+import { FormRow } from '@/components/ui/form-row';
 import type { DraftAccess } from './draft-access';
 import { ChoiceAt, QuantityAt, TextAt } from './draft-fields';
 
@@ -31,7 +31,14 @@ export function AssaySection({ draft }: { draft: DraftAccess }) {
         </FormRow>
       </div>
       <ChoiceAt draft={draft} pointer="/normalisation/method" label="Normalisation" options={METHODS} />
-      <TextAt draft={draft} pointer="/normalisation/note" label="What 0 and 1 stand for" lines={2} optional />
+      <TextAt
+        draft={draft}
+        pointer="/normalisation/note"
+        label="What 0 and 1 stand for"
+        hint="such as: 0 without enzyme, 1 the wild type without ligand"
+        lines={2}
+        optional
+      />
     </div>
   );
 }

@@ -74,10 +74,10 @@ function RoleBoxes({ draft, pointer, name }: { draft: DraftAccess; pointer: stri
       <Disclosure
         className="text-sm"
         summary={
-          <>
+          <span>
             Roles<span className="sr-only"> of {name}</span>
             {roles.length === 0 ? ': none yet' : `: ${roles.join(', ')}`}
-          </>
+          </span>
         }
       >
         {CREDIT_ROLES.map((role) => (

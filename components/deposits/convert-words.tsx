@@ -1,6 +1,6 @@
 /** Statements of a draft in kT, as far as they can be read. */
 import type { ReactNode } from 'react';
-import { gapWords } from '@/components/check/statement-words';
+import { gapWords } from '@/components/assessed/statement-words';
 import { ENERGY_ORIENTATIONS, GAP_UNITS, RATIO_ORIENTATIONS, toKelvin } from '@/lib/engine/units';
 import type { Gap } from '@/schemas/dataset-1.generated';
 import { isObject } from './draft-value';

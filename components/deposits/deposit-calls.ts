@@ -1,6 +1,6 @@
 /** The calls on deposits that pages make, by name. Each throws CallFailed. */
 import type { Assessment } from '@/lib/engine/assessment';
-import type { DepositAnswer, DepositHeadAnswer, SavedDepositAnswer } from '@/schemas/deposit';
+import type { DepositAnswer, DepositHeadAnswer, PublicationDay, SavedDepositAnswer } from '@/schemas/deposit';
 import type { FileAnswer } from '@/schemas/file';
 import { CallFailed, callApi, complaintOf, NO_ANSWER } from './call-api';
 
@@ -44,10 +44,12 @@ export function loadAssessment(id: string, signal?: AbortSignal): Promise<Assess
 }
 
 export interface Decision {
-  kind: 'accepted' | 'changes-requested';
+  kind: 'accepted' | 'changes-requested' | 'declined';
   letter: string;
   /** the revision that the curator has before them */
   revision: number;
+  /** with an acceptance: the day on which it is published, where not at once */
+  publication?: PublicationDay;
 }
 
 export function decideOn(id: string, decision: Decision, key: string): Promise<DepositHeadAnswer> {

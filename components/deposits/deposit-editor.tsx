@@ -1,10 +1,11 @@
 'use client';
 
 import { useEffect, useRef, useState } from 'react';
-import { selectLine } from '@/components/check/select-line';
 import { AxisFrame } from '@/components/layout/axis-frame';
+import { ScrollingCell } from '@/components/layout/scrolling-cell';
 import { Button } from '@/components/ui/button';
 import type { SelectOption } from '@/components/ui/select-field';
+import { selectLine } from '@/components/ui/select-line';
 import type { SyntaxProblem } from '@/lib/documents/find-syntax-error';
 import { locatePointer } from '@/lib/documents/locate-pointer';
 import type { DepositAnswer } from '@/schemas/deposit';
@@ -13,11 +14,13 @@ import { DeleteDraft } from './delete-draft';
 import { DepositFiles } from './deposit-files';
 import { DocumentText } from './document-text';
 import { accessTo, isUnchanged } from './draft-access';
+import { DraftBar } from './draft-bar';
 import { DraftCollapse } from './draft-collapse';
 import { DraftStatus, DraftVerdict } from './draft-status';
 import { listOf, objectOf, readDraft, textOf } from './draft-value';
 import { EditorSections } from './editor-sections';
 import { ErrorList } from './error-list';
+import { inFormWords } from './form-words';
 import { controlOf, type EditorSection, placeOf } from './go-to-place';
 import { Letters } from './letters';
 import { POINTS_A_PAGE, PointsEditor } from './points-editor';
@@ -28,6 +31,8 @@ import { type SavedDraft, useDraft } from './use-draft';
 import { useDraftAssessment } from './use-draft-assessment';
 import { useDraftCalls } from './use-draft-calls';
 import { useKeptDraft } from './use-kept-draft';
+import { useLeaveWarning } from './use-leave-warning';
+import { useOffCurveSteps } from './use-off-curve-steps';
 import { useSaveKey } from './use-save-key';
 
 export type DepositRecord = Omit<DepositAnswer, 'document'>;
@@ -62,6 +67,7 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
     if (isDirty && !calls.save.isPending) calls.save.mutate(null);
   };
   useSaveKey(save);
+  useLeaveWarning(isDirty);
   const choose = (next: number) => {
     setSeries(next);
     setPage(0);
@@ -92,7 +98,9 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
     setGoal(null);
   }, [goal, openText, isText]);
 
-  const access = accessTo(content.value, saved.content.value, saved.errors, draft.set);
+  const worded = saved.errors.map((one) => inFormWords(one, content.value));
+  const access = accessTo(content.value, saved.content.value, worded, draft.set);
+  const showOffCurve = useOffCurveSteps(assessed?.data ?? null, go);
   const isStale = assessed !== null && assessed.value !== content.value;
   const shownSeries = Math.min(series, Math.max(0, listOf(content.value.series).length - 1));
   const complaint = calls.complaint;
@@ -105,137 +113,157 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
     setOwn(null);
     kept.forget();
   };
+  // What an earlier visit left is taken up or discarded first: a second unsaved version would take its place.
+  const isAsked = kept.left !== null && own === null;
   return (
     <div ref={form} className="flex grow flex-col">
-      <AxisFrame
-        who={
-          <div className="stuck-contents thin-scroll lg:-m-2 lg:p-2">
-            <h1 className="head break-words text-xl">{textOf(content.value.title) || 'Untitled draft'}</h1>
-            <p className="mt-1 text-sm text-soft">{deposit.laboratory.name}</p>
-            <p className="mt-2">
-              {edit === null ? (
-                <Button onClick={openText}>Document as JSON</Button>
-              ) : (
-                <Button onClick={() => setProblem(placed(draft.closeText()))}>Back to the form</Button>
-              )}
-            </p>
-            {edit === null ? (
-              <EditorSections
-                draft={access}
-                systems={systems}
-                section={section}
-                onSection={setSection}
-                series={shownSeries}
-                onSeries={choose}
-              />
-            ) : (
-              <p className="mt-4 text-sm text-soft">
-                The whole document, for what the form has no field for. Save it from here, or go back to the
-                form.
+      <DraftBar
+        state={deposit.state}
+        errors={saved.errors.length}
+        isDirty={isDirty}
+        isSaving={calls.save.isPending}
+        onSave={save}
+      />
+      {left === null ? null : (
+        <div className="page-width py-4">
+          <OwnText
+            text={left}
+            isAsked={isAsked}
+            onTakeUp={() => {
+              takeUp(left);
+              forget();
+            }}
+            onDiscard={forget}
+          />
+        </div>
+      )}
+      <div inert={isAsked} className="flex grow flex-col inert:opacity-50">
+        <AxisFrame
+          who={
+            <ScrollingCell label="The draft" stuck>
+              <h1 className="head break-words text-xl">{textOf(content.value.title) || 'Untitled draft'}</h1>
+              <p className="mt-1 text-sm text-soft">{deposit.laboratory.name}</p>
+              <p className="mt-2">
+                {edit === null ? (
+                  <Button onClick={openText}>Document as JSON</Button>
+                ) : (
+                  <Button onClick={() => setProblem(placed(draft.closeText()))}>Back to the form</Button>
+                )}
               </p>
-            )}
-          </div>
-        }
-        axis={
-          edit === null ? (
-            <div className="flex h-full flex-col">
-              {assessed ? (
-                <DraftCollapse data={assessed.data} series={shownSeries} onSeries={choose} />
+              {edit === null ? (
+                <EditorSections
+                  draft={access}
+                  systems={systems}
+                  section={section}
+                  onSection={setSection}
+                  series={shownSeries}
+                  onSeries={choose}
+                />
               ) : (
-                <p className="border-hairline border-b px-2 py-3 text-soft max-lg:px-0">
-                  {saved.errors.length > 0
-                    ? 'The collapse is drawn here once nothing is left to mend.'
-                    : isFetching
-                      ? 'Computing the collapse …'
-                      : 'The collapse could not be computed.'}
+                <p className="mt-4 text-sm text-soft">
+                  The whole document, for what the form has no field for. Save it from here, or go back to the
+                  form.
                 </p>
               )}
-              <PointsEditor
-                key={shownSeries}
-                draft={access}
-                series={shownSeries}
-                page={page}
-                onPage={setPage}
-                isStale={isStale}
-                computedAt={(index) => {
-                  const assessedPoint = assessed?.data.series[shownSeries]?.assessed.points[index];
-                  const isSame =
-                    pointAt(assessed?.value, shownSeries, index) ===
-                    pointAt(content.value, shownSeries, index);
-                  return isSame ? (assessedPoint ?? null) : null;
-                }}
-              />
-            </div>
-          ) : (
-            <DocumentText
-              text={edit.text}
-              area={area}
-              problem={problem ?? placeIn(complaint)}
-              onText={(next) => {
-                setProblem(null);
-                draft.setText(next);
-              }}
-              onLine={(line, column) => area.current && selectLine(area.current, line, column)}
-            />
-          )
-        }
-        verdict={
-          <div className="stuck-contents thin-scroll lg:-m-2 lg:p-2">
-            <DraftStatus
-              state={deposit.state}
-              version={saved.version}
-              updatedAt={saved.updatedAt}
-              isDirty={isDirty}
-              isSaving={calls.save.isPending}
-              onSave={save}
-            />
-            <div className="mt-4 space-y-4 empty:hidden">
-              {calls.theirs ? (
-                <StaleNotice
-                  theirs={calls.theirs}
-                  busy={calls.save.isPending}
-                  onLoad={() => setOwn(calls.loadTheirs())}
-                  onOverwrite={() => calls.save.mutate(calls.theirs)}
-                />
-              ) : null}
-              {complaint && (edit === null || complaint.line === undefined) ? (
-                <ProblemNotice error={calls.save.error} />
-              ) : null}
-              {left === null ? null : (
-                <OwnText
-                  text={left}
-                  onTakeUp={() => {
-                    takeUp(left);
-                    forget();
+            </ScrollingCell>
+          }
+          axis={
+            edit === null ? (
+              <div className="flex h-full flex-col">
+                {assessed ? (
+                  <DraftCollapse data={assessed.data} series={shownSeries} onSeries={choose} />
+                ) : (
+                  <p className="border-hairline border-b px-2 py-3 text-soft max-lg:px-0">
+                    {saved.errors.length > 0
+                      ? 'The collapse is drawn here once nothing is left to mend.'
+                      : isFetching
+                        ? 'Computing the collapse …'
+                        : 'The collapse could not be computed.'}
+                  </p>
+                )}
+                <PointsEditor
+                  key={shownSeries}
+                  draft={access}
+                  series={shownSeries}
+                  page={page}
+                  onPage={setPage}
+                  isStale={isStale}
+                  computedAt={(index) => {
+                    const assessedPoint = assessed?.data.series[shownSeries]?.assessed.points[index];
+                    const isSame =
+                      pointAt(assessed?.value, shownSeries, index) ===
+                      pointAt(content.value, shownSeries, index);
+                    return isSame ? (assessedPoint ?? null) : null;
                   }}
-                  onDiscard={forget}
                 />
-              )}
-            </div>
-            <Letters decisions={deposit.decisions} />
-            {saved.errors.length > 0 ? (
-              <ErrorList
-                errors={saved.errors}
-                isStanding={(pointer) => isUnchanged(content.value, saved.content.value, pointer)}
-                onGo={go}
+              </div>
+            ) : (
+              <DocumentText
+                text={edit.text}
+                area={area}
+                problem={problem ?? placeIn(complaint)}
+                onText={(next) => {
+                  setProblem(null);
+                  draft.setText(next);
+                }}
+                onLine={(line, column) => area.current && selectLine(area.current, line, column)}
               />
-            ) : null}
-            {assessed ? <DraftVerdict summary={assessed.data.assessment.summary} isStale={isStale} /> : null}
-            <ProblemNotice error={error} />
-            <DepositFiles id={id} initial={files} editable />
-            <SubmitForm
-              obstacle={obstacleOf(isDirty, saved.errors.length)}
-              busy={calls.submit.isPending || calls.submit.isSuccess}
-              onSubmit={() => calls.submit.mutate()}
-            />
-            <ProblemNotice error={calls.submit.error} />
-            {deposit.state === 'draft' ? (
-              <DeleteDraft busy={calls.remove.isPending} onDelete={() => calls.remove.mutate()} />
-            ) : null}
-            <ProblemNotice error={calls.remove.error} />
-          </div>
-        }
-      />
+            )
+          }
+          verdict={
+            <ScrollingCell label="State of the draft" stuck>
+              <DraftStatus
+                state={deposit.state}
+                updatedAt={saved.updatedAt}
+                isDirty={isDirty}
+                isSaving={calls.save.isPending}
+                onSave={save}
+              />
+              <div className="mt-4 space-y-4 empty:hidden">
+                {calls.theirs ? (
+                  <StaleNotice
+                    theirs={calls.theirs}
+                    busy={calls.save.isPending}
+                    onLoad={() => setOwn(calls.loadTheirs())}
+                    onOverwrite={() => calls.save.mutate(calls.theirs)}
+                  />
+                ) : null}
+                {complaint && (edit === null || complaint.line === undefined) ? (
+                  <ProblemNotice error={calls.save.error} isKept />
+                ) : null}
+              </div>
+              <Letters decisions={deposit.decisions} />
+              {saved.errors.length > 0 ? (
+                <ErrorList
+                  errors={saved.errors}
+                  document={edit === null ? content.value : null}
+                  isStanding={(pointer) => isUnchanged(content.value, saved.content.value, pointer)}
+                  onGo={go}
+                />
+              ) : null}
+              {assessed ? (
+                <DraftVerdict
+                  summary={assessed.data.assessment.summary}
+                  isStale={isStale}
+                  onOffCurve={showOffCurve}
+                />
+              ) : null}
+              <ProblemNotice error={error} isKept />
+              <DepositFiles id={id} initial={files} editable />
+              <SubmitForm
+                obstacle={obstacleOf(isDirty, saved.errors.length)}
+                busy={calls.submit.isPending || calls.submit.isSuccess}
+                onSubmit={() => calls.submit.mutate()}
+              />
+              <ProblemNotice error={calls.submit.error} isKept />
+              {deposit.state === 'draft' ? (
+                <DeleteDraft busy={calls.remove.isPending} onDelete={() => calls.remove.mutate()} />
+              ) : null}
+              <ProblemNotice error={calls.remove.error} isKept />
+            </ScrollingCell>
+          }
+        />
+      </div>
     </div>
   );
 }

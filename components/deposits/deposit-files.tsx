@@ -3,10 +3,10 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
+import { formatBytes } from '@/components/ui/format-bytes';
 import type { FileAnswer } from '@/schemas/file';
 import { newKey } from './call-api';
 import { listFiles, removeFile, uploadFile } from './deposit-calls';
-import { formatBytes } from './format-bytes';
 import { ProblemNotice } from './problem-notice';
 import { useCall } from './use-call';
 

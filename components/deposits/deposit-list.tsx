@@ -6,6 +6,7 @@ import { ActionLink } from '@/components/ui/action-link';
 import { formatCount } from '@/components/ui/format-quantity';
 import { type DepositState, stateWords } from '@/lib/deposits/states';
 import type { AssessmentSummary } from '@/lib/engine/assessment';
+import type { PublicationDay } from '@/schemas/deposit';
 import { Moment } from './moment';
 import { nextStep } from './state-sentence';
 
@@ -18,6 +19,8 @@ export interface ListedDeposit {
   errorCount: number;
   updatedAt: number;
   accession: string | null;
+  /** the day for which an accepted one waits */
+  publication: PublicationDay | null;
   /** of the newest revision; null where nothing was submitted yet */
   summary: Pick<AssessmentSummary, 'points' | 'offCurve'> | null;
 }
@@ -109,7 +112,8 @@ function StateFilter({ states, chosen }: { states: readonly DepositState[]; chos
 }
 
 function DepositRow({ deposit, severalLabs }: { deposit: ListedDeposit; severalLabs: boolean }) {
-  const { id, title, state, system, labName, errorCount, updatedAt, accession, summary } = deposit;
+  const { id, title, state, system, labName, errorCount, updatedAt, accession, publication, summary } =
+    deposit;
   const about = [severalLabs ? labName : '', system, accession ?? ''].filter(Boolean).join(' · ');
   return (
     <li className="grid gap-x-6 gap-y-1 border-hairline border-b px-4 py-3.5 hover:bg-wash max-lg:px-0 sm:grid-cols-[minmax(0,1fr)_13rem]">
@@ -128,7 +132,7 @@ function DepositRow({ deposit, severalLabs }: { deposit: ListedDeposit; severalL
       </div>
       <div>
         <p className="font-semibold">{stateWords(state)}</p>
-        <p className="text-sm text-soft">{nextStep(state, errorCount)}</p>
+        <p className="text-sm text-soft">{nextStep(state, errorCount, publication)}</p>
         {summary ? (
           <p className="figures text-sm">
             <span className={summary.offCurve > 0 ? 'text-off' : ''}>

@@ -11,6 +11,7 @@ import { AssessedRecord } from './assessed-record';
 import { recallSubmission } from './deposit-calls';
 import type { DepositRecord as Deposit } from './deposit-editor';
 import { DepositFiles } from './deposit-files';
+import { DraftFromDocument } from './draft-from-document';
 import { StateHead } from './draft-status';
 import { Letters } from './letters';
 import { Moment } from './moment';
@@ -23,24 +24,27 @@ interface DepositRecordProps {
   assessment: Assessment;
   files: FileAnswer[];
   mayRecall: boolean;
+  /** the document as it was sent, for a new draft from it; null where the reader may make none */
+  text: string | null;
 }
 
 /** A deposit that cannot be changed now: its newest revision assessed, its state, and what can be done with it. */
-export function DepositRecord({ deposit, document, assessment, files, mayRecall }: DepositRecordProps) {
+export function DepositRecord({ deposit, document, assessment, files, mayRecall, text }: DepositRecordProps) {
   const router = useRouter();
   const recall = useCall({
     mutationFn: () => recallSubmission(deposit.id),
     onSuccess: () => router.refresh(),
   });
-  const { state, accession, revisions } = deposit;
+  const { state, accession, publication, revisions } = deposit;
   return (
     <AssessedRecord
       document={document}
       assessment={assessment}
       laboratory={deposit.laboratory.name}
+      state={state}
       aside={
         <>
-          <StateHead state={state} />
+          <StateHead state={state} publication={publication} />
           {revisions[0] ? (
             <p className="mt-3 text-sm">
               Revision {revisions[0].number}, submitted <Moment at={revisions[0].submittedAt} />
@@ -64,6 +68,9 @@ export function DepositRecord({ deposit, document, assessment, files, mayRecall 
           ) : null}
           <ProblemNotice error={recall.error} />
           <Letters decisions={deposit.decisions} />
+          {state === 'declined' && text !== null ? (
+            <DraftFromDocument text={text} lab={deposit.laboratory.slug} />
+          ) : null}
           <DepositFiles id={deposit.id} initial={files} editable={false} />
         </>
       }

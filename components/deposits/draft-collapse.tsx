@@ -1,9 +1,9 @@
 'use client';
 
 import { useState } from 'react';
-import type { Look } from '@/components/check/assessed-view';
-import { CollapseSwitch } from '@/components/check/collapse-switch';
-import { sentenceOn } from '@/components/check/summary-sentence';
+import type { Look } from '@/components/assessed/assessed-view';
+import { CollapseSwitch } from '@/components/assessed/collapse-switch';
+import { sentenceOn } from '@/components/assessed/summary-sentence';
 import { CollapsePanel } from '@/components/plots/collapse-panel';
 import { fullWindow, openingWindow } from '@/components/plots/energy-window';
 import { energiesOf, type PlotData, pointsOf } from '@/components/plots/plot-data';

@@ -1,7 +1,7 @@
 'use client';
 
-import { InlineQuantity } from '@/components/check/inline-quantity';
 import { CONTROL_STYLE, Field } from '@/components/ui/field';
+import { InlineQuantity } from '@/components/ui/inline-quantity';
 import { SelectField, type SelectOption } from '@/components/ui/select-field';
 import type { DraftAccess } from './draft-access';
 import { textOf } from './draft-value';

@@ -1,18 +1,19 @@
 'use client';
 
-import { FlagCounts } from '@/components/check/flag-counts';
+import { FlagCounts } from '@/components/assessed/flag-counts';
+import { actionStyle } from '@/components/ui/action-style';
 import { Button } from '@/components/ui/button';
 import { formatCount, formatPValue, formatScore } from '@/components/ui/format-quantity';
 import { MathSymbol } from '@/components/ui/math-symbol';
 import type { DepositState } from '@/lib/deposits/states';
 import { stateWords } from '@/lib/deposits/states';
 import type { AssessmentSummary } from '@/lib/engine/assessment';
+import type { PublicationDay } from '@/schemas/deposit';
 import { Moment } from './moment';
 import { stateSentence } from './state-sentence';
 
 interface DraftStatusProps {
   state: DepositState;
-  version: number;
   updatedAt: number;
   isDirty: boolean;
   isSaving: boolean;
@@ -20,7 +21,7 @@ interface DraftStatusProps {
 }
 
 /** In which state the deposit is, whether what stands here is saved, and the way to save it. */
-export function DraftStatus({ state, version, updatedAt, isDirty, isSaving, onSave }: DraftStatusProps) {
+export function DraftStatus({ state, updatedAt, isDirty, isSaving, onSave }: DraftStatusProps) {
   return (
     <>
       <StateHead state={state} />
@@ -31,30 +32,48 @@ export function DraftStatus({ state, version, updatedAt, isDirty, isSaving, onSa
           <span className="text-warn">Changed here, not saved yet.</span>
         ) : (
           <>
-            Saved as version {version}, <Moment at={updatedAt} />
+            Saved <Moment at={updatedAt} />
           </>
         )}
       </p>
-      <Button variant="primary" className="mt-2" disabled={!isDirty || isSaving} onClick={onSave}>
-        Save
-      </Button>
+      <p className="mt-2 flex flex-wrap items-center gap-x-5 gap-y-1">
+        <Button variant={isDirty ? 'primary' : 'outline'} disabled={!isDirty || isSaving} onClick={onSave}>
+          Save
+        </Button>
+        <a href="#submission" className={actionStyle()}>
+          To submission
+        </a>
+      </p>
     </>
   );
 }
 
+interface StateHeadProps {
+  state: DepositState;
+  /** the day for which an accepted deposit waits */
+  publication?: PublicationDay | null;
+}
+
 /** The state in words, and what it means. */
-export function StateHead({ state }: { state: DepositState }) {
+export function StateHead({ state, publication = null }: StateHeadProps) {
   const words = stateWords(state);
   return (
     <>
       <p className="font-semibold font-serif text-2xl">{words.charAt(0).toUpperCase() + words.slice(1)}</p>
-      <p className="mt-1 text-sm text-soft">{stateSentence(state)}</p>
+      <p className="mt-1 text-sm text-soft">{stateSentence(state, publication)}</p>
     </>
   );
 }
 
+interface DraftVerdictProps {
+  summary: AssessmentSummary;
+  isStale: boolean;
+  /** leads to the points off the curve, one after the other */
+  onOffCurve: () => void;
+}
+
 /** What the assessment amounts to, in a few figures. */
-export function DraftVerdict({ summary, isStale }: { summary: AssessmentSummary; isStale: boolean }) {
+export function DraftVerdict({ summary, isStale, onOffCurve }: DraftVerdictProps) {
   return (
     <section aria-label="Verdict" className="mt-5 border-ink border-t pt-3">
       <p className="font-serif">
@@ -65,7 +84,7 @@ export function DraftVerdict({ summary, isStale }: { summary: AssessmentSummary;
         points on the curve, RMS <MathSymbol>z</MathSymbol> {formatScore(summary.rmsZ)},{' '}
         <MathSymbol>p</MathSymbol> {formatPValue(summary.pValue)}
       </p>
-      <FlagCounts counts={summary} />
+      <FlagCounts counts={summary} onOffCurve={onOffCurve} />
       {isStale ? <p className="mt-2 text-sm text-soft">Of the draft as it was last saved.</p> : null}
     </section>
   );

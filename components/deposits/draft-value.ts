@@ -1,5 +1,6 @@
 /** A draft as a value: any JSON object, read and changed by JSON Pointer (RFC 6901), valid or not. */
-import { readNumber } from '@/components/check/read-number';
+import { MINUS } from '@/components/ui/format-quantity';
+import { readNumber } from '@/components/ui/read-number';
 import { membersOf } from '@/lib/documents/json-pointer';
 
 export type JsonObject = Record<string, unknown>;
@@ -69,7 +70,7 @@ export function entryText(value: unknown): string {
     ? ''
     : typeof value === 'object'
       ? JSON.stringify(value)
-      : String(value);
+      : String(value).replace(/^-(?=\d)/, MINUS);
 }
 
 /** Reads a document's text as a draft, or says why it is none; a byte order mark is passed over. */

@@ -29,7 +29,7 @@ export function IdentitySection({ draft, systems }: IdentitySectionProps) {
         draft={draft}
         pointer="/system"
         label="System"
-        hint="the protein and its ligands"
+        hint="The protein and its ligands, from the curators’ list. If yours is not on it, save the draft without a system and ask the curators of this installation to list it: until then it counts as one thing to mend, and nothing else waits for it."
         options={systems}
       />
       <ChoiceAt draft={draft} pointer="/licence" label="Licence" options={LICENCES} />

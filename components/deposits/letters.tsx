@@ -6,6 +6,7 @@ type Decision = DepositAnswer['decisions'][number];
 const KIND_WORDS: Record<Decision['kind'], string> = {
   accepted: 'accepted',
   'changes-requested': 'asked for changes',
+  declined: 'declined',
 };
 
 /** What the curators wrote, the newest first; decisions without a word are left out. */

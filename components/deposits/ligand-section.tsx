@@ -1,4 +1,4 @@
-import { FormRow } from '@/components/check/form-row';
+import { FormRow } from '@/components/ui/form-row';
 import { unitLabel } from '@/components/ui/unit-label';
 import { CONCENTRATION_UNITS } from '@/lib/engine/units';
 import type { DraftAccess } from './draft-access';
@@ -8,8 +8,8 @@ import { OddShape } from './odd-shape';
 
 const UNITS = CONCENTRATION_UNITS.map((unit) => ({ value: unit, label: unitLabel(unit) }));
 const KINDS = [
-  { value: 'free', label: 'free concentration' },
-  { value: 'total', label: 'total concentration' },
+  { value: 'free', label: 'free ligand' },
+  { value: 'total', label: 'total ligand, bound and free' },
 ];
 
 /** The ligands, with the units and uncertainties of their concentrations. Another one is added as JSON. */
@@ -34,18 +34,21 @@ export function LigandSection({ draft }: { draft: DraftAccess }) {
             <ChoiceAt
               draft={draft}
               pointer={`${pointer}/concentration`}
-              label="Stated is the"
+              label="What the concentrations are"
               options={KINDS}
             />
+            <p className="text-sm text-soft">
+              How well its concentrations are known, as relative standard uncertainties; left empty: exactly.
+            </p>
             <div className="border-hairline border-t">
-              <FormRow label="Dispensing" note="relative u">
+              <FormRow label="Each dispensing" note="0.02 means 2 %">
                 <NumberAt
                   draft={draft}
                   pointer={`${pointer}/relativeU`}
                   name={`relative uncertainty of dispensing ${name}`}
                 />
               </FormRow>
-              <FormRow label="Stock" note="relative u">
+              <FormRow label="The stock" note="0.02 means 2 %">
                 <NumberAt
                   draft={draft}
                   pointer={`${pointer}/stockRelativeU`}

@@ -1,8 +1,9 @@
 'use client';
 
-import { type KeyboardEvent, useId } from 'react';
+import { type KeyboardEvent, useId, useState } from 'react';
 import type { DraftAccess } from './draft-access';
-import { listOf, readEntry } from './draft-value';
+import { objectOf } from './draft-value';
+import { measuredPlaces, measuredText, withMeasured } from './measured-entry';
 import { useTyped } from './use-typed';
 
 interface CellProps {
@@ -14,89 +15,46 @@ interface CellProps {
 const CELL =
   'figures -my-1 min-h-7 w-full min-w-14 border-transparent border-b-2 bg-transparent text-right hover:border-field focus:border-act aria-invalid:border-off aria-invalid:text-off';
 
-/** One cell of the table of points: a number, or replicates with space between them. */
+/** One cell of the table of points that holds a number. */
 export function PointCell({ draft, pointer, name }: CellProps) {
-  return pointer.endsWith('/replicates') ? (
-    <ReplicatesCell draft={draft} pointer={pointer} name={name.replace('activity', 'replicates')} />
-  ) : (
-    <NumberCell draft={draft} pointer={pointer} name={name} />
+  const { text, onText } = useTyped(draft, pointer);
+  return (
+    <CellInput pointer={pointer} name={name} text={text} error={draft.errorAt(pointer)} onText={onText} />
   );
 }
 
-function NumberCell({ draft, pointer, name }: CellProps) {
-  const { text, onText } = useTyped(draft, pointer);
-  return <CellInput draft={draft} pointer={pointer} name={name} text={text} onText={onText} />;
-}
-
-/** Replicates, with space between them. */
-function ReplicatesCell({ draft, pointer, name }: CellProps) {
-  const list = listOf(draft.at(pointer));
-  const onText = (text: string) =>
-    draft.set(
-      pointer,
-      text
-        .split(/[\s;]+/)
-        .map(readEntry)
-        .filter((one) => one !== undefined),
-    );
-  // Read when the cell is left: while it is typed a space at the end means that more comes.
+/** The cell of a point's activity: a number, or replicates with space between them. `pointer` is the point's. */
+export function MeasuredCell({ draft, pointer, name }: CellProps) {
+  const point = objectOf(draft.at(pointer));
+  const shown = measuredText(point);
+  const [typed, setTyped] = useState({ text: shown, shown });
+  const onText = (text: string) => {
+    const next = withMeasured(point, text);
+    setTyped({ text, shown: measuredText(next) });
+    draft.set(pointer, next);
+  };
+  const hasReplicates = point.replicates !== undefined;
   return (
-    <ReplicatesInput
-      key={list.join(' ')}
-      draft={draft}
-      pointer={pointer}
-      name={name}
-      start={list.join(' ')}
+    <CellInput
+      pointer={`${pointer}/${hasReplicates ? 'replicates' : 'activity'}`}
+      name={hasReplicates ? name.replace('activity', 'replicates') : name}
+      text={typed.shown === shown ? typed.text : shown}
+      error={draft.errorAt(...measuredPlaces(pointer, point))}
       onText={onText}
     />
   );
 }
 
-function ReplicatesInput({
-  draft,
-  pointer,
-  name,
-  start,
-  onText,
-}: CellProps & { start: string; onText: (text: string) => void }) {
-  const id = useId();
-  const error = errorBelow(draft, pointer);
-  return (
-    <>
-      <input
-        type="text"
-        aria-label={name}
-        aria-invalid={error ? true : undefined}
-        aria-describedby={error ? id : undefined}
-        data-pointer={pointer}
-        autoComplete="off"
-        defaultValue={start}
-        onBlur={({ target }) => {
-          if (target.value !== start) onText(target.value);
-        }}
-        onKeyDown={stepByEnter}
-        className={CELL}
-      />
-      <CellError id={id} error={error} />
-    </>
-  );
+interface CellInputProps {
+  pointer: string;
+  name: string;
+  text: string;
+  error: string | undefined;
+  onText: (text: string) => void;
 }
 
-/** What is wrong with a list, or with one of its entries. */
-function errorBelow(draft: DraftAccess, pointer: string): string | undefined {
-  return draft.errorAt(pointer, ...listOf(draft.at(pointer)).map((_, i) => `${pointer}/${i}`));
-}
-
-function CellInput({
-  draft,
-  pointer,
-  name,
-  text,
-  onText,
-}: CellProps & { text: string; onText: (text: string) => void }) {
+function CellInput({ pointer, name, text, error, onText }: CellInputProps) {
   const id = useId();
-  // What is wrong with the whole point is said where its activity stands.
-  const error = draft.errorAt(pointer, pointer.replace(/\/activity$/, ''));
   return (
     <>
       <input
@@ -112,17 +70,13 @@ function CellInput({
         onKeyDown={stepByEnter}
         className={CELL}
       />
-      <CellError id={id} error={error} />
+      {error ? (
+        <span id={id} className="mt-1 block min-w-28 text-left text-off text-xs">
+          {error}
+        </span>
+      ) : null}
     </>
   );
-}
-
-function CellError({ id, error }: { id: string; error: string | undefined }) {
-  return error ? (
-    <span id={id} className="mt-1 block min-w-28 text-left text-off text-xs">
-      {error}
-    </span>
-  ) : null;
 }
 
 /** Enter goes to the same cell of the next row, with Shift of the row before. */

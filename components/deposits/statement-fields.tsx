@@ -1,6 +1,6 @@
-import { FormRow } from '@/components/check/form-row';
-import { InlineSelect } from '@/components/check/inline-select';
-import { ORIENTATION_WORDS, ORIGIN_WORDS } from '@/components/check/statement-words';
+import { ORIENTATION_WORDS, ORIGIN_WORDS } from '@/components/assessed/statement-words';
+import { FormRow } from '@/components/ui/form-row';
+import { InlineSelect } from '@/components/ui/inline-select';
 import { unitLabel } from '@/components/ui/unit-label';
 import {
   CONCENTRATION_UNITS,
@@ -154,13 +154,14 @@ function ConstantRow({ draft, pointer, state, ligand, ofClass }: ConstantRowProp
     .map(objectOf)
     .find(({ id }) => id === ligand);
   const unit = textOf(known?.unit);
+  const name = textOf(known?.name) || ligand;
   return (
-    <FormRow label={state} symbol="K" note={textOf(known?.name) || ligand}>
+    <FormRow label={state} symbol="K" note={name}>
       {stated === null ? null : (
         <QuantityAt
           draft={draft}
           pointer={pointer}
-          name={`K ${state} of ${ligand}${ofClass}`}
+          name={`K ${state} of ${name}${ofClass}`}
           units={unitsLike(unit)}
         />
       )}

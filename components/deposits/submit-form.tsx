@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { useId, useState } from 'react';
 import { Button } from '@/components/ui/button';
 
 const CAUTIONS = [
@@ -20,14 +20,17 @@ export function SubmitForm({ obstacle, busy, onSubmit }: SubmitFormProps) {
   const [confirmed, setConfirmed] = useState<readonly string[]>([]);
   const toggle = (caution: string, on: boolean) =>
     setConfirmed((before) => (on ? [...before, caution] : before.filter((one) => one !== caution)));
-  const isReady = obstacle === null && confirmed.length === CAUTIONS.length;
+  const id = useId();
+  const reason = obstacle ?? (confirmed.length < CAUTIONS.length ? 'Confirm both sentences first.' : null);
+  const isReady = reason === null && !busy;
   return (
     <form
       aria-label="Submit for curation"
-      className="mt-5 border-ink border-t pt-3"
+      id="submission"
+      className="mt-5 scroll-mt-28 border-ink border-t pt-3"
       onSubmit={(event) => {
         event.preventDefault();
-        if (isReady && !busy) onSubmit();
+        if (isReady) onSubmit();
       }}
     >
       <h2 className="font-semibold">Before submitting</h2>
@@ -45,10 +48,21 @@ export function SubmitForm({ obstacle, busy, onSubmit }: SubmitFormProps) {
           {caution}
         </label>
       ))}
-      {obstacle ? <p className="mt-2 text-sm text-warn">{obstacle}</p> : null}
-      <Button type="submit" className="mt-2" disabled={!isReady || busy}>
+      {/* Reachable while it does nothing, so that the reason is read where one looks for the action. */}
+      <Button
+        type="submit"
+        variant={obstacle === null ? 'primary' : 'outline'}
+        className="mt-3"
+        aria-disabled={!isReady}
+        aria-describedby={reason === null ? undefined : id}
+      >
         {busy ? 'Submitting …' : 'Submit for curation'}
       </Button>
+      {reason === null ? null : (
+        <p id={id} className="mt-1.5 text-sm text-warn">
+          {reason}
+        </p>
+      )}
     </form>
   );
 }

@@ -2,11 +2,11 @@
 
 import { useEffect } from 'react';
 
-/** Ctrl + S (or ⌘ S) anywhere on the page saves. */
+/** Ctrl + S (or ⌘ S) anywhere on the page saves, with Caps Lock on as well. */
 export function useSaveKey(save: () => void): void {
   useEffect(() => {
     const follow = (event: KeyboardEvent) => {
-      if (event.key !== 's' || !(event.ctrlKey || event.metaKey)) return;
+      if (event.key.toLowerCase() !== 's' || !(event.ctrlKey || event.metaKey)) return;
       event.preventDefault();
       save();
     };

@@ -19,7 +19,7 @@ export function NewToken({ token }: { token: string }) {
     }
   };
   return (
-    <Notice kind="note" title="The token is made. Copy it now: it is shown this once." live>
+    <Notice kind="note" title="Here is the token" live>
       <div className="flex items-end gap-4">
         <Field label="Token" className="min-w-0 grow">
           {(tie) => (
@@ -37,6 +37,9 @@ export function NewToken({ token }: { token: string }) {
           {copied ? 'Copied' : 'Copy'}
         </Button>
       </div>
+      <p className="text-sm">
+        Put it where the script will read it before you leave this page: only a hash of it stays here.
+      </p>
       <p className="text-sm text-soft">
         A script sends it as the header <code>Authorization: Bearer ckt_…</code> with each call. Whoever holds
         it may do what was ticked.

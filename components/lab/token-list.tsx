@@ -1,7 +1,7 @@
 import { Button } from '@/components/ui/button';
+import { CalendarDate } from '@/components/ui/calendar-date';
 import { Disclosure } from '@/components/ui/disclosure';
 import type { ListedToken } from '@/lib/labs/list-tokens';
-import { CalendarDate } from './calendar-date';
 import { SCOPE_WORDS } from './scope-words';
 
 interface TokenListProps {
@@ -10,7 +10,7 @@ interface TokenListProps {
   revoke: (form: FormData) => Promise<void>;
 }
 
-const STATE_WORDS = { live: 'Live', expired: 'Ended', revoked: 'Revoked' } as const;
+const STATE_WORDS = { live: 'Valid', expired: 'Ended', revoked: 'Withdrawn' } as const;
 
 /** What a laboratory's scripts let themselves in with: what each may do, until when, when it was last used. */
 export function TokenList({ labId, tokens, revoke }: TokenListProps) {
@@ -47,7 +47,8 @@ function TokenDates({
     <p className="text-sm text-soft">
       Made <CalendarDate at={createdAt} />
       {createdBy ? ` by ${createdBy}` : ''}; {state === 'expired' ? 'ended' : 'ends'}{' '}
-      <CalendarDate at={expiresAt} />; {lastUsedAt === null ? 'never used' : 'last used '}
+      <CalendarDate at={expiresAt} />;{' '}
+      {lastUsedAt === null ? 'no script has called with it' : 'a script last called with it '}
       {lastUsedAt === null ? null : <CalendarDate at={lastUsedAt} />}
     </p>
   );
@@ -66,7 +67,7 @@ function Revocation({
     <Disclosure
       summary={
         <>
-          Revoke<span className="sr-only"> {token.name}</span>
+          End it now<span className="sr-only">: {token.name}</span>
         </>
       }
       className="mt-1 text-sm"
@@ -75,7 +76,7 @@ function Revocation({
         <input type="hidden" name="labId" value={labId} />
         <input type="hidden" name="tokenId" value={token.id} />
         <p>Scripts that use it stop working at once, and it cannot be given back.</p>
-        <Button type="submit">Revoke “{token.name}”</Button>
+        <Button type="submit">End “{token.name}”</Button>
       </form>
     </Disclosure>
   );

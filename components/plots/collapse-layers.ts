@@ -3,12 +3,14 @@ import type { CustomSeriesOption, LineSeriesOption, ScatterSeriesOption } from '
 import type { CustomSeriesRenderItemAPI, CustomSeriesRenderItemReturn } from 'echarts/types/dist/shared';
 import type { PointRow, RowsByFlag } from './collapse-points';
 import { type CollapseView, LARGE, MOST_ERROR_BARS, residualBound } from './collapse-view';
-import { diamondAt, triangleAt } from './flag-shapes';
+import { diamondAt, ringAt, triangleAt } from './flag-shapes';
 import { masterCurveLine } from './master-curve';
 
 export type Layer = LineSeriesOption | ScatterSeriesOption | CustomSeriesOption;
 
 const DIMMED = 0.13;
+/** Flagged points of other series stay plain to see: they are what is looked for. */
+const DIMMED_FLAGGED = 0.6;
 /** Where a row's series and point stand in a data item. */
 export const SERIES_AT = 2;
 export const POINT_AT = 3;
@@ -18,8 +20,8 @@ type Panel = 0 | 1;
 
 const panelAxes = (panel: Panel) => ({ xAxisIndex: panel, yAxisIndex: panel });
 
-function opacityOf(view: CollapseView, series: number, full = 1): number {
-  return view.lit === null || view.lit === series ? full : full * DIMMED;
+function opacityOf(view: CollapseView, series: number, full = 1, dimmed = DIMMED): number {
+  return view.lit === null || view.lit === series ? full : full * dimmed;
 }
 
 function colourOf(view: CollapseView, series: number): string {
@@ -141,7 +143,32 @@ function diamonds(view: CollapseView, panel: Panel, data: number[][]): CustomSer
 
 function shapeOf(view: CollapseView, api: CustomSeriesRenderItemAPI) {
   const [x, y] = api.coord([api.value(0), api.value(1)]);
-  return { x, y, colours: view.colours, opacity: opacityOf(view, Number(api.value(SERIES_AT))) };
+  return {
+    x,
+    y,
+    colours: view.colours,
+    opacity: opacityOf(view, Number(api.value(SERIES_AT)), 1, DIMMED_FLAGGED),
+  };
+}
+
+/** A ring around the point that the page was opened at. */
+function ring(view: CollapseView, panel: Panel, rows: readonly PointRow[]): CustomSeriesOption {
+  const isMarked = ({ series, point }: PointRow) =>
+    series === view.marked?.series && point === view.marked.point;
+  return {
+    id: `ring ${panel}`,
+    type: 'custom',
+    ...panelAxes(panel),
+    data: rows.filter(isMarked).map(panel === 0 ? plotItem : residualItem(view)),
+    silent: true,
+    z: 9,
+    clip: false,
+    encode: { x: 0, y: 1 },
+    renderItem: (_, api) => {
+      const [x, y] = api.coord([api.value(0), api.value(1)]);
+      return ringAt({ x, y, colours: view.colours });
+    },
+  };
 }
 
 /** One standard uncertainty either way: of the measurement up and down, of the energy left and right. */
@@ -185,15 +212,18 @@ function errorBar(view: CollapseView, api: CustomSeriesRenderItemAPI): CustomSer
 /** All layers of both panels. */
 export function layersOf(view: CollapseView, rows: RowsByFlag): Layer[] {
   const residual = residualItem(view);
+  const all = [...rows['on-curve'], ...rows.warning, ...rows['off-curve']];
   return [
     ...responses(view),
     masterCurve(view),
-    errorBars(view, [...rows['on-curve'], ...rows.warning, ...rows['off-curve']]),
+    errorBars(view, all),
     ...dimmedDots(view, 0, rows['on-curve'].map(plotItem)),
     triangles(view, 0, rows.warning.map(plotItem)),
     diamonds(view, 0, rows['off-curve'].map(plotItem)),
     ...dimmedDots(view, 1, rows['on-curve'].map(residual)),
     triangles(view, 1, rows.warning.map(residual)),
     diamonds(view, 1, rows['off-curve'].map(residual)),
+    ring(view, 0, all),
+    ring(view, 1, all),
   ];
 }

@@ -25,7 +25,7 @@ export function collapseOption(view: CollapseView): Record<string, unknown> {
     tooltip: pointTooltip(colours, (item) =>
       describePoint(view.data, { series: item[SERIES_AT], point: item[POINT_AT] }),
     ),
-    series: [...layersOf(view, rows), levels(colours), residualLimits(colours)],
+    series: [...layersOf(view, rows), ...levels(colours), ...residualLimits(colours)],
   };
 }
 

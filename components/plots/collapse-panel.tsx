@@ -21,6 +21,8 @@ export interface CollapsePanelProps {
   /** the ligand whose responses the curves are, even while they lie on the master curve */
   ligand: string | null;
   lit: number | null;
+  /** the point that the page was opened at */
+  marked?: PointPlace | null;
   sentence: string;
   onPoint?: (place: PointPlace | null) => void;
   onChoose?: (place: PointPlace) => void;
@@ -30,7 +32,7 @@ const STILL = '(prefers-reduced-motion: reduce)';
 
 /** The collapse, the residual panel under it, and the words that stand in them. */
 export function CollapsePanel(props: CollapsePanelProps) {
-  const { data, window, byLigand, ligand, lit, sentence, onPoint, onChoose } = props;
+  const { data, window, byLigand, ligand, lit, marked = null, sentence, onPoint, onChoose } = props;
   const still = useMedia(STILL);
   const box = useRef<HTMLDivElement>(null);
   const { height } = useSize(box);
@@ -43,7 +45,7 @@ export function CollapsePanel(props: CollapsePanelProps) {
     <div ref={box} className="flex min-h-[400px] grow flex-col lg:min-h-[clamp(30rem,100dvh_-_14rem,52rem)]">
       {height === 0 ? null : (
         <CollapseChart
-          view={{ data, window, axis, curves, by, lit, animate: travelling && !still, heights }}
+          view={{ data, window, axis, curves, by, lit, marked, animate: travelling && !still, heights }}
           sentence={sentence}
           onPoint={onPoint}
           onChoose={onChoose}

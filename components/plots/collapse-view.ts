@@ -2,7 +2,7 @@
 import type { ConcentrationAxis } from './concentration-axis';
 import type { EnergyWindow } from './energy-window';
 import type { PlotColours } from './plot-colours';
-import type { PlotData } from './plot-data';
+import type { PlotData, PointPlace } from './plot-data';
 import type { ResponseCurve } from './response-curves';
 
 export interface CollapseView {
@@ -15,6 +15,8 @@ export interface CollapseView {
   by: 'energy' | 'concentration';
   /** series whose points are lit, the rest dimmed */
   lit: number | null;
+  /** the point that the page was opened at; null for none */
+  marked: PointPlace | null;
   colours: PlotColours;
   /** whether points may travel */
   animate: boolean;

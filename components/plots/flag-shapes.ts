@@ -3,6 +3,7 @@ import type { CustomSeriesRenderItemReturn } from 'echarts/types/dist/shared';
 import type { PlotColours } from './plot-colours';
 
 const DIAMOND = 4.6;
+const RING = 11;
 const TRIANGLE = 'M0,-6 L6,5 L-6,5 Z';
 
 interface FlagShape {
@@ -55,8 +56,26 @@ export function diamondAt(
   if (stemTo === null) return { type: 'group', x, y, transition: ['x', 'y'], children: [head] };
   const stem = {
     type: 'line' as const,
+    // What is said stands beside the point, so the point itself is what is pointed at.
+    silent: true,
     shape: { x1: 0, y1: 0, x2: 0, y2: stemTo - y },
     style: { stroke: colours.off, lineWidth: 1, opacity: opacity * 0.8 },
   };
   return { type: 'group', x, y, transition: ['x', 'y'], children: [stem, head] };
+}
+
+/** Around the point that is meant: a ring, away from its shape. */
+export function ringAt({
+  x,
+  y,
+  colours,
+}: Pick<FlagShape, 'x' | 'y' | 'colours'>): CustomSeriesRenderItemReturn {
+  return {
+    type: 'circle',
+    x,
+    y,
+    transition: ['x', 'y'],
+    shape: { cx: 0, cy: 0, r: RING },
+    style: { fill: 'transparent', stroke: colours.act, lineWidth: 2 },
+  };
 }

@@ -3,11 +3,12 @@
 import { type ReactNode, useCallback, useMemo } from 'react';
 import { PANEL_GAP } from './collapse-view';
 import { LitLayer } from './lit-layer';
-import { DATASET_AT, POINT_AT } from './overlay-layers';
+import { DATASET_AT, POINT_AT, SERIES_AT } from './overlay-layers';
 import { overlayOption } from './overlay-option';
 import type { OverlayPoint, OverlayView } from './overlay-view';
 import { PlotCanvas } from './plot-canvas';
 import { usePlotColours } from './plot-colours';
+import type { PointPlace } from './plot-data';
 
 export interface OverlayChartProps {
   view: Omit<OverlayView, 'colours'>;
@@ -17,7 +18,7 @@ export interface OverlayChartProps {
   sentence: string;
   /** the dataset, by its place in the overlay's list, whose point is pointed at; null when none is */
   onPoint: (dataset: number | null) => void;
-  onChoose: (dataset: number) => void;
+  onChoose: (dataset: number, place: PointPlace) => void;
   onDrawn: () => void;
   children: ReactNode;
 }
@@ -32,7 +33,7 @@ export default function OverlayChart(props: OverlayChartProps) {
   const choose = useCallback(
     (item: number[] | undefined) => {
       const dataset = datasetIn(item);
-      if (dataset !== null) onChoose(dataset);
+      if (item && dataset !== null) onChoose(dataset, { series: item[SERIES_AT], point: item[POINT_AT] });
     },
     [onChoose],
   );

@@ -38,6 +38,6 @@ function panelsWith(view: OverlayView, layers: OverlayLayer[]): Record<string, u
       { ...hiddenAxis(0), min: low, max: high },
       { ...hiddenAxis(1), min: -OVERLAY_RESIDUAL_BOUND, max: OVERLAY_RESIDUAL_BOUND },
     ],
-    series: [...layers, levels(colours), residualLimits(colours)],
+    series: [...layers, ...levels(colours), ...residualLimits(colours)],
   };
 }

@@ -8,6 +8,7 @@ import type { EnergyWindow } from './energy-window';
 import { exceedsOverlayResiduals, type OverlayPoint } from './overlay-view';
 import { PanelCaptions } from './panel-captions';
 import { heightsIn } from './panel-heights';
+import type { PointPlace } from './plot-data';
 import { useSize } from './use-size';
 
 const OverlayChart = dynamic(() => import('./overlay-chart'), { ssr: false, loading: () => null });
@@ -21,7 +22,7 @@ export interface OverlayPanelProps {
   sentence: string;
   /** accession of the dataset whose point is pointed at; null when none is */
   onPoint: (accession: string | null) => void;
-  onChoose: (accession: string) => void;
+  onChoose: (accession: string, place: PointPlace) => void;
 }
 
 /** The overlay, the residual panel under it, and the words that stand in them; first the shape of what comes. */
@@ -47,9 +48,9 @@ export function OverlayPanel({ overlay, window, lit, sentence, onPoint, onChoose
           lit={lit}
           sentence={sentence}
           onPoint={(dataset) => onPoint(dataset === null ? null : accessionAt(dataset))}
-          onChoose={(dataset) => {
+          onChoose={(dataset, place) => {
             const accession = accessionAt(dataset);
-            if (accession !== null) onChoose(accession);
+            if (accession !== null) onChoose(accession, place);
           }}
           onDrawn={() => setDrawn(true)}
         >

@@ -4,12 +4,14 @@ import { type CollapseHeights, PANEL_GAP } from './collapse-view';
 import type { PlotColours } from './plot-colours';
 
 const LEVELS = [0, 0.25, 0.5, 0.75, 1];
+/** Where the residual panel says what it is, pixels: no residual is drawn there. */
+export const RESIDUAL_HEAD = 24;
 
 /** The plot above, the residual panel below, both from edge to edge. */
 export function panelGrids({ plot, residual }: CollapseHeights): Record<string, unknown>[] {
   return [
     { left: 0, right: 0, top: 0, height: plot },
-    { left: 0, right: 0, top: plot + PANEL_GAP, height: residual },
+    { left: 0, right: 0, top: plot + PANEL_GAP + RESIDUAL_HEAD, height: residual - RESIDUAL_HEAD },
   ];
 }
 
@@ -24,8 +26,48 @@ export const hiddenAxis = (gridIndex: number) => ({
   animation: false,
 });
 
-/** A series without points that carries lines and their labels. */
-function ruled(id: string, panel: 0 | 1, lines: Record<string, unknown>[]): LineSeriesOption {
+/** A line across a panel, and what is written at it. */
+interface RuledLine {
+  at: number;
+  type: 'solid' | 'dotted';
+  color: string;
+  label?: string;
+}
+
+/** Lines behind the points, and their words before them, with a rim of the ground around each letter. */
+function ruled(
+  id: string,
+  panel: 0 | 1,
+  lines: readonly RuledLine[],
+  colours: PlotColours,
+): LineSeriesOption[] {
+  const said = lines.filter(({ label }) => label !== undefined);
+  return [
+    carrier(
+      id,
+      panel,
+      1,
+      lines.map(({ at, type, color }) => ({
+        yAxis: at,
+        label: { show: false },
+        lineStyle: { color, type, width: 1 },
+      })),
+    ),
+    carrier(
+      `${id}, words`,
+      panel,
+      8,
+      said.map(({ at, label }) => ({
+        yAxis: at,
+        lineStyle: { color: 'transparent' },
+        label: words(panel, at, label, colours),
+      })),
+    ),
+  ];
+}
+
+/** A series without points that carries lines or their words. */
+function carrier(id: string, panel: 0 | 1, z: number, data: Record<string, unknown>[]): LineSeriesOption {
   return {
     id,
     type: 'line',
@@ -33,48 +75,46 @@ function ruled(id: string, panel: 0 | 1, lines: Record<string, unknown>[]): Line
     yAxisIndex: panel,
     data: [],
     silent: true,
-    markLine: { z: 1, silent: true, symbol: 'none', animation: false, precision: 6, data: lines as never },
+    z,
+    markLine: { z, silent: true, symbol: 'none', animation: false, precision: 6, data: data as never },
+  };
+}
+
+/** Levels are written at the left above their line; limits at the right, away from the middle. */
+function words(panel: 0 | 1, at: number, label: string | undefined, { soft, ground }: PlotColours) {
+  const side = panel === 0 ? 'insideStartTop' : at > 0 ? 'insideEndTop' : 'insideEndBottom';
+  return {
+    position: side,
+    distance: [8, at < 0 ? 7 : 3],
+    formatter: label,
+    color: soft,
+    fontSize: 12,
+    textBorderColor: ground,
+    textBorderWidth: 3,
   };
 }
 
 /** The levels of activity, 0 to 1 by quarters. */
-export function levels(colours: PlotColours): LineSeriesOption {
-  const line = (level: number) => ({
-    yAxis: level,
-    lineStyle: { color: colours.hairline, type: 'solid', width: 1 },
-    label: {
-      position: 'insideStartTop',
-      distance: [8, 3],
-      formatter: level.toFixed(2),
-      color: colours.soft,
-      fontSize: 12,
-    },
-  });
-  return { ...ruled('levels', 0, LEVELS.map(line)), z: 1 };
+export function levels(colours: PlotColours): LineSeriesOption[] {
+  const lines = LEVELS.map((at) => ({
+    at,
+    type: 'solid' as const,
+    color: colours.hairline,
+    label: at.toFixed(2),
+  }));
+  return ruled('levels', 0, lines, colours);
 }
 
 /** The limits of the residual panel: two and three standard uncertainties. */
-export function residualLimits(colours: PlotColours): LineSeriesOption {
-  const line = (z: number, type: 'solid' | 'dotted', color: string, label = '') => ({
-    yAxis: z,
-    lineStyle: { color, type, width: 1 },
-    label: {
-      show: label !== '',
-      position: z > 0 ? 'insideEndTop' : 'insideEndBottom',
-      distance: [8, 2],
-      formatter: label,
-      color: colours.soft,
-      fontSize: 12,
-    },
-  });
-  const lines = [
-    line(0, 'solid', colours.soft),
-    line(2, 'solid', colours.hairline),
-    line(-2, 'solid', colours.hairline),
-    line(3, 'dotted', colours.off, '+3'),
-    line(-3, 'dotted', colours.off, '\u22123'),
+export function residualLimits(colours: PlotColours): LineSeriesOption[] {
+  const lines: RuledLine[] = [
+    { at: 0, type: 'solid', color: colours.soft },
+    { at: 2, type: 'solid', color: colours.hairline },
+    { at: -2, type: 'solid', color: colours.hairline },
+    { at: 3, type: 'dotted', color: colours.off, label: '+3' },
+    { at: -3, type: 'dotted', color: colours.off, label: '\u22123' },
   ];
-  return { ...ruled('residual limits', 1, lines), z: 1 };
+  return ruled('residual limits', 1, lines, colours);
 }
 
 /**
@@ -89,8 +129,8 @@ export function pointTooltip(
   return {
     trigger: 'item',
     renderMode: 'richText',
-    confine: true,
-    position: cornerAwayFrom,
+    confine: false,
+    position: besidePoint(colours),
     transitionDuration: 0,
     backgroundColor: colours.ground,
     borderColor: colours.ink,
@@ -105,19 +145,41 @@ export function pointTooltip(
   };
 }
 
-/** The corner of the plot that a sigmoid leaves empty, upper left, unless the point itself is there. */
-function cornerAwayFrom(
-  [x, y]: [number, number],
-  _params: unknown,
-  _element: unknown,
-  _area: unknown,
-  {
-    contentSize: [width, height],
-    viewSize: [whole],
-  }: { contentSize: [number, number]; viewSize: [number, number] },
-): [number, number] {
-  const isThere = x < width + 80 && y < height + 50;
-  return isThere ? [whole - width - 12, height + 60] : [48, 26];
+/** How far from the point, and from the canvas' edges, it stands, pixels. */
+const AWAY = 14;
+const LEAST_EDGE = 4;
+
+interface DrawnText {
+  setStyle: (style: Record<string, unknown>) => void;
+  getBoundingRect: () => { width: number; height: number };
+}
+
+/**
+ * Beside the point, on the side that a sigmoid leaves empty: above and to the left of the lower half, below and to the
+ * right of the upper one. The library draws rich text in a face of its own, so the page's is set here, before measuring.
+ */
+function besidePoint({ font }: Pick<PlotColours, 'font'>) {
+  return (
+    [x, y]: [number, number],
+    _params: unknown,
+    element: DrawnText,
+    _area: unknown,
+    { viewSize: [across, down] }: { viewSize: [number, number] },
+  ): [number, number] => {
+    element.setStyle({ font: `13px ${font}`, lineHeight: 19 });
+    const { width, height } = element.getBoundingRect();
+    const isUpper = y < down * UPPER_HALF;
+    const left = isUpper ? x + AWAY : x - width - AWAY;
+    const top = isUpper ? y + AWAY : y - height - AWAY;
+    return [between(left, across - width), between(top, down - height)];
+  };
+}
+
+/** Where activity one half stands, as a share of the height of both panels. */
+const UPPER_HALF = 0.36;
+
+function between(place: number, most: number): number {
+  return Math.max(LEAST_EDGE, Math.min(most - LEAST_EDGE, place));
 }
 
 /** Braces and bars would start the library's own styling. */

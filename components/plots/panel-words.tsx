@@ -13,11 +13,19 @@ export function PanelWords({ data, byLigand }: PanelWordsProps) {
   return (
     <PanelCaptions
       by={byLigand === null ? 'energy' : 'concentration'}
-      residualNote={exceedsResidualPanel(data) ? 'beyond ±9 at the edge' : undefined}
+      residualNote={residualNote(data, byLigand)}
     >
       {byLigand === null ? null : <AxisName data={data} ligand={byLigand} />}
     </PanelCaptions>
   );
+}
+
+function residualNote(data: PlotData, byLigand: string | null): string | undefined {
+  const notes = [
+    byLigand === null ? '' : 'on the kT axis below',
+    exceedsResidualPanel(data) ? 'beyond ±9 at the edge' : '',
+  ];
+  return notes.filter(Boolean).join(' · ') || undefined;
 }
 
 function AxisName({ data, ligand }: { data: PlotData; ligand: string }) {

@@ -109,10 +109,11 @@ export function formatScore(score: number): string {
   return formatFixed(score, size < 10 ? 2 : size < 100 ? 1 : 0);
 }
 
-/** A p-value or q: two significant digits, `<0.001` below that, a dash where there is none. */
+/** A p-value or q: two significant digits, `<0.001` below that, `>0.99` where they would round to 1, a dash where there is none. */
 export function formatPValue(p: number | null): string {
   if (p === null) return '\u2013';
-  return p < 0.001 ? '<0.001' : p.toPrecision(2);
+  if (p < 0.001) return '<0.001';
+  return p >= 0.995 ? '>0.99' : p.toPrecision(2);
 }
 
 /** How many, with a comma between thousands. */

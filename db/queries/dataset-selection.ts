@@ -6,6 +6,7 @@ import { deposits } from '@/db/tables/deposits';
 import { laboratories } from '@/db/tables/laboratories';
 import { systems } from '@/db/tables/systems';
 import type { DatasetFilters } from '@/schemas/dataset-query';
+import { ENERGY_CELL_KT } from '@/schemas/density-grid';
 
 /** Energies as cells of `density_cells`: from the first up to but without the end. */
 export interface CellWindow {
@@ -22,9 +23,6 @@ export interface Selection {
 export type FacetName = 'system' | 'lab' | 'ligand' | 'flag';
 
 type Flag = DatasetFilters['flag'][number];
-
-/** Width of an energy cell, kT; `lib/datasets/density-grid.ts` says the same. */
-const ENERGY_CELL_KT = 0.1;
 
 /** The text of an accession, for the search. */
 const ACCESSION = sql`printf('CK-%06d', ${datasets.accession})`;

@@ -40,6 +40,9 @@ const HEAD = {
   publishedAt: datasets.publishedAt,
   state: deposits.state,
   stateChangedAt: deposits.updatedAt,
+  withdrawnAt: datasets.withdrawnAt,
+  withdrawalReason: datasets.withdrawalReason,
+  strip: datasets.strip,
 };
 
 export type DatasetHead = Awaited<ReturnType<typeof selectDataset>> & object;
@@ -197,6 +200,20 @@ export async function selectFacet(
   const spread =
     name === 'ligand' ? from.innerJoin(sql`json_each(${datasets.ligands}) as ligand`, sql`true`) : from;
   return spread.where(selectedBy(selection, name)).groupBy(by[name]).orderBy(desc(number), asc(columns.name));
+}
+
+/** What systems or laboratories of some slugs are called, whether or not any dataset of theirs is selected. */
+export async function selectFacetNames(
+  name: 'system' | 'lab',
+  slugs: string[],
+): Promise<{ value: string; name: string }[]> {
+  const database = await readDatabase();
+  const table = name === 'system' ? systems : laboratories;
+  return database
+    .select({ value: table.slug, name: table.name })
+    .from(table)
+    .where(inArray(table.slug, slugs))
+    .orderBy(asc(table.name));
 }
 
 /** Datasets that have points of each flag, under the other filters. */

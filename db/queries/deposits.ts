@@ -2,7 +2,8 @@
 import { and, desc, eq, getTableColumns, inArray, lt, max, or, sql } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import { deposits } from '@/db/tables/deposits';
-import { laboratories } from '@/db/tables/laboratories';
+import { laboratories, labTokens, memberships } from '@/db/tables/laboratories';
+import { people } from '@/db/tables/people';
 import { systems } from '@/db/tables/systems';
 
 /** Whatever can select: the database, or a transaction. */
@@ -11,18 +12,33 @@ export type Reader = Pick<Database | Transaction, 'select'>;
 type State = typeof deposits.$inferSelect.state;
 
 const { document: _document, errors: _errors, ...headColumns } = getTableColumns(deposits);
+// Whoever curates is not named to a laboratory; its own people and tokens are.
+const SAVED_BY = sql<string | null>`coalesce(
+  (select ${people.name} from ${people} where ${deposits.updatedBy} = 'person:' || ${people.id}
+    and (${people.role} = 'depositor' or exists (select 1 from ${memberships}
+      where ${memberships.personId} = ${people.id} and ${memberships.labId} = ${deposits.labId}))),
+  (select 'the token “' || ${labTokens.name} || '”' from ${labTokens}
+    where ${deposits.updatedBy} = 'token:' || ${labTokens.id}))`;
+/** Whether a draft names no listed system and that is not among its errors already; 1 or 0. */
+const NAMES_UNLISTED = sql<number>`(${deposits.state} in ('draft', 'changes-requested')
+  and not exists (select 1 from ${systems} where ${systems.slug} = ${deposits.system} and ${systems.status} = 'listed')
+  and instr(${deposits.errors}, '"pointer":"/system"') = 0)`;
 const HEAD = {
   ...headColumns,
-  errorCount: sql<number>`json_array_length(${deposits.errors})`,
+  errorCount: sql<number>`${deposits.errorCount} + ${NAMES_UNLISTED}`,
   labSlug: laboratories.slug,
   labName: laboratories.name,
+  savedBy: SAVED_BY,
 };
 
 /** A deposit without its document. */
 export type DepositHead = Omit<typeof deposits.$inferSelect, 'document' | 'errors'> & {
+  /** what stands in the way of submitting it; a system that is not listed counts */
   errorCount: number;
   labSlug: string;
   labName: string;
+  /** who of the laboratory made the last change; null: a curator, or the application */
+  savedBy: string | null;
 };
 
 /** A deposit without its document, or undefined. */
@@ -84,6 +100,7 @@ export interface DraftContent {
   title: string;
   system: string;
   errors: string;
+  errorCount: number;
 }
 
 /** Which row an update means: what it was when the decision was made. Where it is no more, nothing is changed. */
@@ -93,11 +110,18 @@ export interface Expected {
   from: State;
 }
 
+/** When and by whom a deposit is changed. */
+interface ChangedBy {
+  updatedAt: number;
+  /** as the audit trail writes actors */
+  updatedBy: string;
+}
+
 /** Puts another document in the place of the working one. Returns whether the row was still the expected one. */
 export async function updateDocument(
   tx: Transaction,
   expected: Expected,
-  content: DraftContent & { updatedAt: number },
+  content: DraftContent & ChangedBy,
 ): Promise<boolean> {
   const changed = await tx
     .update(deposits)
@@ -111,7 +135,12 @@ export async function updateDocument(
 export async function updateState(
   tx: Transaction,
   expected: Expected,
-  to: { state: State; updatedAt: number; accession?: number },
+  to: ChangedBy & {
+    state: State;
+    accession?: number;
+    publishOn?: string | null;
+    publishZone?: string | null;
+  },
 ): Promise<boolean> {
   const changed = await tx
     .update(deposits)
@@ -131,6 +160,16 @@ export async function removeDeposit(tx: Transaction, expected: Expected): Promis
 export async function nextAccession(tx: Transaction): Promise<number> {
   const [row] = await tx.select({ highest: max(deposits.accession) }).from(deposits);
   return (row?.highest ?? 0) + 1;
+}
+
+/** The accepted deposits that wait for a day. */
+export async function selectAwaitingDay(
+  reader: Reader,
+): Promise<{ id: string; publishOn: string | null; publishZone: string | null }[]> {
+  return reader
+    .select({ id: deposits.id, publishOn: deposits.publishOn, publishZone: deposits.publishZone })
+    .from(deposits)
+    .where(eq(deposits.state, 'accepted'));
 }
 
 /** Whether a system of that slug is listed. */

@@ -1,17 +1,21 @@
 /** The SQL of laboratory tokens, which are known here by the SHA-256 of the token alone. */
-import { and, desc, eq, gt, isNull } from 'drizzle-orm';
+import { and, desc, eq, getTableColumns, gt, isNull } from 'drizzle-orm';
 import { readDatabase, type Transaction } from '@/db/client';
 import { labTokens } from '@/db/tables/laboratories';
 import { people } from '@/db/tables/people';
 
 export type LabTokenRow = typeof labTokens.$inferSelect;
 
-/** A token that is neither revoked nor past its end, or undefined. */
-export async function selectLiveToken(tokenHash: string, nowMs: number): Promise<LabTokenRow | undefined> {
+/** A token that is neither revoked nor past its end, with the address of who made it, or undefined. */
+export async function selectLiveToken(
+  tokenHash: string,
+  nowMs: number,
+): Promise<(LabTokenRow & { createdByEmail: string | null }) | undefined> {
   const database = await readDatabase();
   const [row] = await database
-    .select()
+    .select({ ...getTableColumns(labTokens), createdByEmail: people.email })
     .from(labTokens)
+    .leftJoin(people, eq(people.id, labTokens.createdBy))
     .where(
       and(eq(labTokens.tokenHash, tokenHash), isNull(labTokens.revokedAt), gt(labTokens.expiresAt, nowMs)),
     );

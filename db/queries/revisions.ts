@@ -1,5 +1,5 @@
 /** The SQL of revisions: immutable snapshots of a deposit's document, each with its assessment. */
-import { and, desc, eq, getTableColumns, inArray, max, sql } from 'drizzle-orm';
+import { and, desc, eq, getTableColumns, inArray, isNotNull, max, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import type { Reader } from '@/db/queries/deposits';
 import { deposits, revisions } from '@/db/tables/deposits';
@@ -33,6 +33,44 @@ export async function selectNewestRevision(
     .orderBy(desc(revisions.number))
     .limit(1);
   return row;
+}
+
+/** The newest revision without document and assessment, or undefined. */
+export async function selectNewestHead(reader: Reader, depositId: string): Promise<RevisionHead | undefined> {
+  const [row] = await reader
+    .select(headColumns)
+    .from(revisions)
+    .where(eq(revisions.depositId, depositId))
+    .orderBy(desc(revisions.number))
+    .limit(1);
+  return row;
+}
+
+/** The newest revision that is published, without document and assessment, or undefined. */
+export async function selectNewestPublished(
+  reader: Reader,
+  depositId: string,
+): Promise<RevisionHead | undefined> {
+  const [row] = await reader
+    .select(headColumns)
+    .from(revisions)
+    .where(and(eq(revisions.depositId, depositId), isNotNull(revisions.publishedAt)))
+    .orderBy(desc(revisions.number))
+    .limit(1);
+  return row;
+}
+
+/** Summaries of the newest revisions of some deposits, as JSON, by the deposit's id. */
+export async function selectNewestSummaries(
+  reader: Reader,
+  depositIds: string[],
+): Promise<Map<string, string>> {
+  const newer = sql`(select max(newer.number) from revisions newer where newer.deposit_id = ${revisions.depositId})`;
+  const rows = await reader
+    .select({ depositId: revisions.depositId, summary: revisions.summary })
+    .from(revisions)
+    .where(and(inArray(revisions.depositId, depositIds), eq(revisions.number, newer)));
+  return new Map(rows.map(({ depositId, summary }) => [depositId, summary]));
 }
 
 /** Number of the newest revision; 0 where there is none. */

@@ -1,5 +1,5 @@
 /** The SQL of sessions, which are known here by the SHA-256 of their id alone. */
-import { and, eq, isNull, lte } from 'drizzle-orm';
+import { and, eq, inArray, isNull, lte, or } from 'drizzle-orm';
 import { readDatabase, type Transaction } from '@/db/client';
 import { people, sessions } from '@/db/tables/people';
 
@@ -44,7 +44,16 @@ export async function deleteSessionsOf(tx: Transaction, personId: string): Promi
   await tx.delete(sessions).where(eq(sessions.personId, personId));
 }
 
-/** Removes the sessions that ended at or before `nowMs`. */
-export async function deleteEndedSessions(tx: Transaction, nowMs: number): Promise<void> {
-  await tx.delete(sessions).where(lte(sessions.expiresAt, nowMs));
+/** Removes all sessions of the accounts of some e-mail addresses. */
+export async function deleteSessionsOfAddresses(tx: Transaction, emails: readonly string[]): Promise<void> {
+  const owners = tx
+    .select({ id: people.id })
+    .from(people)
+    .where(inArray(people.email, [...emails]));
+  await tx.delete(sessions).where(inArray(sessions.personId, owners));
+}
+
+/** Removes the sessions that ended at or before `nowMs`, or began at or before `begunMs`. */
+export async function deleteEndedSessions(tx: Transaction, nowMs: number, begunMs: number): Promise<void> {
+  await tx.delete(sessions).where(or(lte(sessions.expiresAt, nowMs), lte(sessions.createdAt, begunMs)));
 }

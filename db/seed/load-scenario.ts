@@ -2,10 +2,13 @@
  * Loads the demonstration scenario into a database that holds no deposits: all of it in one transaction, so that a
  * start that is cut off leaves nothing behind. It writes what the verbs write, with dates of its own.
  */
-import { count } from 'drizzle-orm';
+import { count, eq, notInArray } from 'drizzle-orm';
 import { type Transaction, write } from '@/db/client';
 import { upsertListedSystem } from '@/db/queries/systems';
+import { installKeys } from '@/db/tables/computation-limits';
 import { deposits } from '@/db/tables/deposits';
+import { people } from '@/db/tables/people';
+import { DEMO_ACCOUNTS } from '@/lib/people/demo-accounts';
 import { ensureDemoAccounts, ensureLaboratory } from '@/lib/people/ensure-demo-accounts';
 import { LABORATORIES, SYSTEMS } from './laboratories';
 import { makeDeposits } from './make-deposits';
@@ -19,8 +22,26 @@ const FIRST_ACCESSION = 101;
 /** The laboratory of the demonstration's depositor and manager. */
 const DEMO_LAB: LabSlug = 'halvorn-biophysics';
 
-/** Makes accounts, laboratories, systems and deposits of the demonstration; what is there already stays. */
+/** What marks a database as the demonstration's, beside the keys of the installation. */
+const MARK = 'demonstration';
+
+/** Thrown where the database holds something that is not the demonstration's. */
+export class NotForDemonstration extends Error {
+  constructor() {
+    super(
+      'The database holds people or deposits that are not the demonstration’s. Give the demonstration a folder of its own: CURVEKEEP_DATA_DIR.',
+    );
+    this.name = 'NotForDemonstration';
+  }
+}
+
+/**
+ * Makes accounts, laboratories, systems and deposits of the demonstration; what is there already stays.
+ *
+ * @throws NotForDemonstration before anything is written
+ */
 export async function loadScenario(): Promise<void> {
+  await write('acknowledged', markAsDemonstration);
   const labs = await ensureLaboratories();
   const people = await ensureDemoAccounts([
     { email: 'depositor@demo.example', labId: labs[DEMO_LAB], role: 'member' },
@@ -40,6 +61,18 @@ async function ensureLaboratories(): Promise<Record<LabSlug, string>> {
   const ids: [string, string][] = [];
   for (const laboratory of LABORATORIES) ids.push([laboratory.slug, await ensureLaboratory(laboratory)]);
   return Object.fromEntries(ids) as Record<LabSlug, string>;
+}
+
+/** Everybody knows the accounts' password, so that they come into no database that is somebody's. */
+async function markAsDemonstration(tx: Transaction): Promise<void> {
+  const [mark] = await tx.select().from(installKeys).where(eq(installKeys.name, MARK));
+  if (mark) return;
+  const own = DEMO_ACCOUNTS.map(({ email }) => email);
+  const [others] = await tx.select({ number: count() }).from(people).where(notInArray(people.email, own));
+  const [all] = await tx.select({ number: count() }).from(people);
+  const isSomebodys = others?.number !== 0 || (all?.number === 0 && !(await isEmpty(tx)));
+  if (isSomebodys) throw new NotForDemonstration();
+  await tx.insert(installKeys).values({ name: MARK, value: Buffer.from([1]) });
 }
 
 async function isEmpty(tx: Transaction): Promise<boolean> {

@@ -5,10 +5,12 @@ import type { Transaction } from '@/db/client';
 import { insertDecision } from '@/db/queries/decisions';
 import { insertDeposit } from '@/db/queries/deposits';
 import { insertRevision } from '@/db/queries/revisions';
-import { deposits } from '@/db/tables/deposits';
+import { datasets } from '@/db/tables/datasets';
+import { type decisions, deposits } from '@/db/tables/deposits';
 import { newId } from '@/lib/auth/hash-token';
 import { encodeDataset } from '@/lib/datasets/encode-dataset';
 import { publishDataset } from '@/lib/datasets/publish-dataset';
+import type { DepositState } from '@/lib/deposits/states';
 import { checkDocument } from '@/lib/documents/check-document';
 import { assess } from '@/lib/engine/assess';
 import type { Assessment } from '@/lib/engine/assessment';
@@ -28,6 +30,8 @@ export interface Authors {
 const HOUR_MS = 3_600_000;
 /** From submission to publication. */
 const REVIEW_MS = 9 * 24 * HOUR_MS;
+/** From now to the publication of what is accepted. */
+const EMBARGO_MS = 90 * 24 * HOUR_MS;
 
 /** Ten o’clock in the morning of a day, UTC, as Unix time in ms. */
 export function timeOf(day: Day): number {
@@ -44,7 +48,11 @@ export async function publishAs(
   const first = timeOf(revisions[0].published);
   const depositId = await writeDeposit(tx, authors, {
     ...{ lab, document: newest.document, state: 'published', accession },
-    ...{ createdAt: first - REVIEW_MS, updatedAt: timeOf(newest.published) },
+    ...{
+      createdAt: first - REVIEW_MS - HOUR_MS,
+      updatedAt: timeOf(newest.published),
+      updatedBy: authors.curator,
+    },
   });
   for (const [i, { document, published }] of revisions.entries()) {
     const publishedAt = timeOf(published);
@@ -59,7 +67,7 @@ export async function publishAs(
   }
 }
 
-/** Writes a deposit that is on its way, or was withdrawn under an accession. */
+/** Writes a deposit that is on its way, was declined, or was withdrawn under an accession. */
 export async function depositAs(
   tx: Transaction,
   authors: Authors,
@@ -68,26 +76,37 @@ export async function depositAs(
 ): Promise<void> {
   const { lab, state, document, letter, day } = made;
   const updatedAt = timeOf(day);
-  const published = state === 'withdrawn';
-  if (published) {
+  if (state === 'withdrawn') {
     const revisions = [{ document, published: '2026-01-15' as const }];
     await publishAs(tx, authors, { lab, accession: withdrawnAccession, revisions });
-    await withdraw(tx, withdrawnAccession, updatedAt);
+    await withdraw(tx, authors, withdrawnAccession, { at: updatedAt, reason: letter ?? '' });
     return;
   }
+  const kind = DECIDED[state];
   const depositId = await writeDeposit(tx, authors, {
-    lab,
-    document,
-    state,
-    createdAt: updatedAt - HOUR_MS,
-    updatedAt,
+    ...{ lab, document, state, createdAt: updatedAt - HOUR_MS, updatedAt },
+    updatedBy: kind === undefined ? authors.depositor(lab) : authors.curator,
+    ...(state === 'accepted' ? publicationFrom(Date.now()) : {}),
   });
   if (state === 'draft') return;
   const revision = { number: 1, document, submittedAt: updatedAt, publishedAt: null };
   await writeRevision(tx, depositId, authors.depositor(lab), revision);
-  if (letter === undefined) return;
-  const decision = { depositId, revision: 1, kind: 'changes-requested', letter } as const;
+  if (kind === undefined || letter === undefined) return;
+  const decision = { depositId, revision: 1, kind, letter };
   await insertDecision(tx, { ...decision, decidedBy: authors.curator, decidedAt: updatedAt });
+}
+
+/** The decision after which a deposit is in a state. */
+const DECIDED: Partial<Record<DepositState, (typeof decisions.$inferInsert)['kind']>> = {
+  'changes-requested': 'changes-requested',
+  accepted: 'accepted',
+  declined: 'declined',
+};
+
+/** A day that is still to come, however long after its making the demonstration is loaded. */
+function publicationFrom(now: number) {
+  const publishOn = new Date(now + EMBARGO_MS).toISOString().slice(0, 10);
+  return { publishOn, publishZone: 'Europe/Oslo' };
 }
 
 interface NewDeposit {
@@ -97,6 +116,9 @@ interface NewDeposit {
   accession?: number;
   createdAt: number;
   updatedAt: number;
+  updatedBy: string;
+  publishOn?: string;
+  publishZone?: string;
 }
 
 async function writeDeposit(tx: Transaction, authors: Authors, made: NewDeposit): Promise<string> {
@@ -108,6 +130,7 @@ async function writeDeposit(tx: Transaction, authors: Authors, made: NewDeposit)
     document: textOf(document),
     ...{ title: document.title, system: document.system },
     errors: JSON.stringify(checked.ok ? [] : checked.errors),
+    errorCount: checked.ok ? 0 : checked.errors.length,
     createdBy: authors.depositor(lab),
   });
   return id;
@@ -130,6 +153,7 @@ async function writeRevision(
   const assessment = assess(document);
   await insertRevision(tx, {
     ...{ depositId, ...rest, submittedBy, document: text },
+    ...{ title: document.title, system: document.system },
     sha256: createHash('sha256').update(text).digest('hex'),
     assessment: JSON.stringify(assessment),
     summary: JSON.stringify(assessment.summary),
@@ -142,6 +166,18 @@ function textOf(document: DatasetDocument): string {
   return `${JSON.stringify(document, null, 2)}\n`;
 }
 
-async function withdraw(tx: Transaction, accession: number, updatedAt: number): Promise<void> {
-  await tx.update(deposits).set({ state: 'withdrawn', updatedAt }).where(eq(deposits.accession, accession));
+async function withdraw(
+  tx: Transaction,
+  { curator }: Authors,
+  accession: number,
+  { at, reason }: { at: number; reason: string },
+): Promise<void> {
+  await tx
+    .update(deposits)
+    .set({ state: 'withdrawn', updatedAt: at, updatedBy: curator })
+    .where(eq(deposits.accession, accession));
+  await tx
+    .update(datasets)
+    .set({ withdrawnAt: at, withdrawalReason: reason, updatedAt: at })
+    .where(eq(datasets.accession, accession));
 }

@@ -38,6 +38,12 @@ export const datasets = sqliteTable(
     fittedHere: integer('fitted_here', { mode: 'boolean' }).notNull(),
     publishedAt: integer('published_at').notNull(),
     updatedAt: integer('updated_at').notNull(),
+    /** Unix time, ms; null as long as its data are given out */
+    withdrawnAt: integer('withdrawn_at'),
+    /** why, as its tombstone says it */
+    withdrawalReason: text('withdrawal_reason'),
+    /** its strip without a window, as JSON; null where it was published before strips were kept */
+    strip: text('strip'),
   },
   (table) => [
     index('datasets_published').on(table.publishedAt),

@@ -1,5 +1,5 @@
 /** Accounts and their sessions. Passwords are argon2id hashes; session ids are kept as SHA-256 hashes. */
-import { index, integer, sqliteTable, text } from 'drizzle-orm/sqlite-core';
+import { index, integer, primaryKey, sqliteTable, text } from 'drizzle-orm/sqlite-core';
 
 export const people = sqliteTable('people', {
   id: text('id').primaryKey(),
@@ -44,5 +44,20 @@ export const signInAttempts = sqliteTable(
   (table) => [
     index('sign_in_attempts_account').on(table.accountKey, table.at),
     index('sign_in_attempts_address').on(table.addressKey, table.at),
+  ],
+);
+
+/** Where somebody signed in from lately, so that failures of others behind the same address do not make them wait. */
+export const signInPlaces = sqliteTable(
+  'sign_in_places',
+  {
+    accountKey: text('account_key').notNull(),
+    addressKey: text('address_key').notNull(),
+    /** Unix time, ms, of the last time */
+    at: integer('at').notNull(),
+  },
+  (table) => [
+    primaryKey({ columns: [table.accountKey, table.addressKey] }),
+    index('sign_in_places_at').on(table.at),
   ],
 );

@@ -1,4 +1,5 @@
 /** The verb behind `POST /api/v1/assessments`: anyone's document in, its assessment out, nothing stored. */
+import { noteLimited } from '@/lib/audit/audit-refusals';
 import type { Actor } from '@/lib/auth/actor';
 import { may } from '@/lib/auth/permissions';
 import { MOST_POINTS } from '@/lib/documents/size-limits';
@@ -47,7 +48,10 @@ export async function assessDocument(call: AssessmentCall): Promise<AssessmentOu
       quota: null,
       retryAfterSeconds: BUSY_RETRY_SECONDS,
     };
-  if (!admission.admitted) return refusedOutcome(admission);
+  if (!admission.admitted) {
+    await noteLimited(call.actor, 'check-document');
+    return refusedOutcome(admission);
+  }
   let computed: Computed = { kind: 'aborted' };
   try {
     computed = await compute(call, admission.lease);

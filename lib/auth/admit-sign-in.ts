@@ -8,11 +8,12 @@ import { installKey } from '@/db/queries/computation-limits';
 import {
   insertSignInAttempt,
   purgeSignInAttempts,
+  selectIsKnownPlace,
   selectSignInAttempts,
 } from '@/db/queries/sign-in-attempts';
 import { addressKey } from '@/lib/assessments/address-key';
 import { newId } from './hash-token';
-import { type Slowing, slowingOf, WINDOW_MS } from './sign-in-limits';
+import { KNOWN_MS, type Slowing, slowingOf, WINDOW_MS } from './sign-in-limits';
 
 export interface SignInPlace {
   /** keyed hash of the e-mail address that was typed */
@@ -33,7 +34,9 @@ export async function admitSignIn(place: SignInPlace, nowMs = Date.now()): Promi
   return write('counter', async (tx) => {
     await purgeSignInAttempts(tx, nowMs - WINDOW_MS);
     const attempt = { ...place, at: nowMs };
-    const slowing = slowingOf(await selectSignInAttempts(tx, place.accountKey, place.addressKey), attempt);
+    const { accountKey, addressKey } = place;
+    const isKnown = await selectIsKnownPlace(tx, accountKey, addressKey, nowMs - KNOWN_MS);
+    const slowing = slowingOf(await selectSignInAttempts(tx, accountKey, addressKey), attempt, isKnown);
     if (slowing.waitMs === 0) await insertSignInAttempt(tx, { id: newId(), ...attempt });
     return slowing;
   });

@@ -7,6 +7,7 @@ import { cache } from 'react';
 import { write } from '@/db/client';
 import { selectLiveToken, updateTokenUsed } from '@/db/queries/lab-tokens';
 import { selectMemberships, selectPerson } from '@/db/queries/people';
+import { isOpenHere } from '@/lib/people/demonstration-only';
 import { type Actor, LAB_TOKEN_SCOPES, type LabToken, type Person, VISITOR } from './actor';
 import { hashToken } from './hash-token';
 import { personOfSession, sessionCookieName, sessionIdOf } from './session';
@@ -37,7 +38,7 @@ async function actorOfSession(sessionId: string | null): Promise<Actor> {
 
 async function personOf(id: string): Promise<Person | null> {
   const [row, memberships] = await Promise.all([selectPerson(id), selectMemberships(id)]);
-  if (!row || row.disabledAt !== null) return null;
+  if (!row || row.disabledAt !== null || !isOpenHere(row.email)) return null;
   const { name, email, role } = row;
   return { kind: 'person', id, name, email, role, memberships };
 }
@@ -46,7 +47,7 @@ async function tokenOf(authorization: string): Promise<LabToken | null> {
   const token = /^Bearer +(\S+) *$/i.exec(authorization)?.[1];
   const now = Date.now();
   const row = token === undefined ? undefined : await selectLiveToken(hashToken(token), now);
-  if (!row) return null;
+  if (!row || (row.createdByEmail !== null && !isOpenHere(row.createdByEmail))) return null;
   if (now - (row.lastUsedAt ?? 0) >= LAST_USE_STEP_MS) {
     await write('counter', (tx) => updateTokenUsed(tx, row.id, now));
   }

@@ -46,11 +46,14 @@ export function sessionAdapter(run: RunWrite): Adapter {
       run((tx) => updateSessionEnd(tx, hashToken(id), expiresAt.getTime())),
     deleteSession: (id) => run((tx) => deleteSession(tx, hashToken(id))),
     deleteUserSessions: (personId) => run((tx) => deleteSessionsOf(tx, personId)),
-    deleteExpiredSessions: () => run((tx) => deleteEndedSessions(tx, Date.now())),
+    deleteExpiredSessions: () =>
+      run((tx) => deleteEndedSessions(tx, Date.now(), Date.now() - ABSOLUTE_LIMIT_MS)),
   };
 }
 
 function sessionOf({ personId, createdAt, expiresAt }: SessionRow, id: string): DatabaseSession {
-  const end = Math.min(expiresAt, createdAt + ABSOLUTE_LIMIT_MS);
+  const limit = createdAt + ABSOLUTE_LIMIT_MS;
+  // Not the earlier of the two: lucia would take an end that is near for one to be moved, at every request.
+  const end = limit <= Date.now() ? limit : expiresAt;
   return { id, userId: personId, expiresAt: new Date(end), attributes: {} };
 }

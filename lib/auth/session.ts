@@ -33,6 +33,11 @@ export async function personOfSession(sessionId: string): Promise<string | null>
   return session?.userId ?? null;
 }
 
+/** The chore that forgets sessions that are over. */
+export async function forgetEndedSessions(): Promise<void> {
+  await lucia((work) => write('counter', work)).deleteExpiredSessions();
+}
+
 /** The session id in a Cookie header, or null. Read here, since lucia's own reader throws at a broken escape. */
 export function sessionIdOf(cookieHeader: string | null): string | null {
   const start = `${sessionCookieName()}=`;

@@ -11,6 +11,12 @@ export const WINDOW_MS = 15 * 60_000;
 const FREE_ON_ONE_ACCOUNT = 5;
 const FREE_ON_ALL_ACCOUNTS = 30;
 
+/**
+ * For how long an account is known at an address after a sign-in. It then waits for its own failures there alone: a
+ * laboratory behind one address does not wait for somebody else’s.
+ */
+export const KNOWN_MS = 30 * 86_400_000;
+
 /** Longest wait between two attempts. */
 const MOST_WAIT_MS = 5 * 60_000;
 
@@ -37,14 +43,22 @@ export interface Slowing {
  * What a further attempt meets.
  *
  * @param attempts those on this account or from this address that did not succeed, in any order
+ * @param isKnown whether the account was signed in to from this address lately
  */
-export function slowingOf(attempts: readonly Attempt[], { accountKey, addressKey, at }: Attempt): Slowing {
+export function slowingOf(
+  attempts: readonly Attempt[],
+  { accountKey, addressKey, at }: Attempt,
+  isKnown = false,
+): Slowing {
   const counting = attempts.filter((attempt) => attempt.at > at - WINDOW_MS);
   const fromHere = counting.filter((attempt) => attempt.addressKey === addressKey);
   const onIt = fromHere.filter((attempt) => attempt.accountKey === accountKey);
   const fromEverywhere = counting.filter((attempt) => attempt.accountKey === accountKey).length;
   return {
-    waitMs: Math.max(waitAfter(onIt, FREE_ON_ONE_ACCOUNT, at), waitAfter(fromHere, FREE_ON_ALL_ACCOUNTS, at)),
+    waitMs: Math.max(
+      waitAfter(onIt, FREE_ON_ONE_ACCOUNT, at),
+      isKnown ? 0 : waitAfter(fromHere, FREE_ON_ALL_ACCOUNTS, at),
+    ),
     holdMs: Math.min(MOST_HOLD_MS, HOLD_STEP_MS * Math.max(0, fromEverywhere - FREE_FROM_EVERYWHERE)),
   };
 }

@@ -10,11 +10,10 @@ import { endSession, noSessionCookie, type SessionCookie } from './session';
  * @param actor whose session it is; a visitor's has ended already
  */
 export async function signOut(actor: Actor, heldSessionId: string | null): Promise<SessionCookie> {
-  if (heldSessionId !== null) {
+  if (heldSessionId !== null && actor.kind === 'person') {
     await write('acknowledged', async (tx) => {
       await endSession(tx, heldSessionId);
-      if (actor.kind === 'person')
-        await recordAudit(tx, { actor, action: 'signed-out', subject: actorKey(actor) });
+      await recordAudit(tx, { actor, action: 'signed-out', subject: actorKey(actor) });
     });
   }
   return noSessionCookie();

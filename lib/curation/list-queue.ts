@@ -3,10 +3,10 @@ import { readDatabase } from '@/db/client';
 import { type QueueRow, selectQueue } from '@/db/queries/revisions';
 import type { Actor } from '@/lib/auth/actor';
 import { may } from '@/lib/auth/permissions';
-import { refusalOf } from '@/lib/deposits/reach-deposit';
 import { AWAITING_DECISION } from '@/lib/deposits/states';
 import type { AssessmentSummary } from '@/lib/engine/assessment';
 import type { Outcome } from '@/lib/errors';
+import { seeQueue } from './see-queue';
 
 export interface QueueEntry extends Omit<QueueRow, 'summary'> {
   /** of the newest revision */
@@ -19,8 +19,8 @@ export interface QueueEntry extends Omit<QueueRow, 'summary'> {
 
 /** Everything submitted or in review. */
 export async function listQueue({ actor }: { actor: Actor }): Promise<Outcome<{ queue: QueueEntry[] }>> {
-  const refusal = refusalOf(actor, 'see-queue');
-  if (refusal !== null) return refusal;
+  const seen = await seeQueue(actor, 'queue:');
+  if (!seen.ok) return seen;
   const now = Date.now();
   const rows = await selectQueue(await readDatabase(), AWAITING_DECISION);
   const queue = rows.map(({ summary, ...row }) => ({

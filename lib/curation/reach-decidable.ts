@@ -1,10 +1,11 @@
-/** What both decisions of a curator begin with. */
+/** What every decision of a curator begins with. */
 import type { DepositHead, Reader } from '@/db/queries/deposits';
 import { newestRevisionNumber } from '@/db/queries/revisions';
 import type { Actor } from '@/lib/auth/actor';
 import { reachDeposit } from '@/lib/deposits/reach-deposit';
 import { awaitsDecision, stateWords } from '@/lib/deposits/states';
 import { failed, type Outcome } from '@/lib/errors';
+import { isPlainText, UNPLAIN } from '@/schemas/plain-text';
 
 /** Longest letter, in characters. */
 export const MOST_LETTER = 20_000;
@@ -36,11 +37,16 @@ export async function reachDecidable(
     : failed('conflict', `Revision ${revision} has come in meanwhile; read it before you decide.`);
 }
 
-/** The failure where a letter is too long, or empty although one is needed; else null. */
-export function letterRefusal(letter: string, isNeeded: boolean) {
+/**
+ * The failure where a letter is too long, cannot be kept, or is empty although one is needed; else null.
+ *
+ * @param missing what it must say; null where it may be empty
+ */
+export function letterRefusal(letter: string, missing: string | null) {
   const refuse = (detail: string) =>
     failed('invalid-input', undefined, { errors: [{ pointer: '/letter', detail }] });
-  if (isNeeded && letter.trim() === '') return refuse('write what should be changed');
+  if (missing !== null && letter.trim() === '') return refuse(missing);
+  if (!isPlainText(letter)) return refuse(UNPLAIN);
   const most = MOST_LETTER.toLocaleString('en-GB');
   return letter.length > MOST_LETTER ? refuse(`a letter may have at most ${most} characters`) : null;
 }

@@ -1,9 +1,10 @@
 /** Reads a curator's decision from the body of a call. */
 import type { z } from 'zod';
 import { readDatabase } from '@/db/client';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
 import type { Actor } from '@/lib/auth/actor';
 import { invalidInput } from '@/lib/auth/input-errors';
-import { auditingRefusals, auditSubject, reachDeposit } from '@/lib/deposits/reach-deposit';
+import { auditSubject, reachDeposit } from '@/lib/deposits/reach-deposit';
 import { failed, type Outcome } from '@/lib/errors';
 import type { BodyResult } from '@/lib/serving/read-body';
 import { decisionSchema } from '@/schemas/decision';

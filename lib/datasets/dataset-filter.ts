@@ -2,7 +2,8 @@
 import type { Selection } from '@/db/queries/dataset-selection';
 import type { EnergyWindowAnswer, PointCounts } from '@/schemas/dataset-answers';
 import type { DatasetFilters } from '@/schemas/dataset-query';
-import { type CellWindow, cellWindow, ENERGY_CELL_KT } from './density-grid';
+import { ENERGY_CELL_KT } from '@/schemas/density-grid';
+import { type CellWindow, cellWindow } from './density-grid';
 
 /** What the filters select. */
 export function selectionOf({ from, to, ...filters }: DatasetFilters): Selection {

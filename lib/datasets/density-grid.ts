@@ -1,9 +1,5 @@
-/** The cells of the (energy, activity) plane in which points are counted at publication. */
-
-/** Width of a cell along the energy axis, kT. */
-export const ENERGY_CELL_KT = 0.1;
-/** Height of a cell along the activity axis. */
-export const ACTIVITY_CELL = 0.01;
+/** Which cell of the density grid a value lies in, and which cells a window touches. */
+import { ACTIVITY_CELL, ENERGY_CELL_KT } from '@/schemas/density-grid';
 
 /** Rounding of a window's edge that is meant to lie on the edge of a cell. */
 const EDGE = 1e-6;

@@ -2,6 +2,7 @@
 import type { DatasetSummary, OffCurveRow, SeriesRow } from '@/db/queries/published';
 import type { Assessment, SeriesAssessment } from '@/lib/engine/assessment';
 import type { DatasetDocument, Series } from '@/schemas/dataset-1.generated';
+import { plainLine } from '@/schemas/plain-text';
 import { type DensityCell, densityCells } from './density-cells';
 import { encodePoints } from './encode-columns';
 
@@ -36,10 +37,10 @@ function summaryOf(document: DatasetDocument, { summary, series }: Assessment): 
   const { points, onCurve, warning, offCurve, rmsZ, pValue } = summary;
   return {
     system: document.system,
-    title: document.title,
+    title: plainLine(document.title),
     licence: document.licence,
-    readout: document.assay.readout,
-    ligands: document.ligands.map(({ name }) => name),
+    readout: plainLine(document.assay.readout),
+    ligands: document.ligands.map(({ name }) => plainLine(name)),
     points,
     onCurve,
     warning,
@@ -60,8 +61,8 @@ function seriesRow(series: Series, assessed: SeriesAssessment | undefined, posit
   return {
     position,
     seriesId: series.id,
-    label: series.label,
-    variant: series.variant,
+    label: plainLine(series.label),
+    variant: plainLine(series.variant),
     origin,
     points: points.length,
     onCurve: flagged('on-curve'),

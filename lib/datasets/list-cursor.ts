@@ -17,10 +17,15 @@ export function decodeCursor(cursor: string, kinds: ('string' | 'number')[]): (s
   try {
     const place: unknown = JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8'));
     if (!Array.isArray(place) || place.length !== kinds.length) return null;
-    return place.every((part, i) => typeof part === kinds[i]) ? place : null;
+    return place.every((part, i) => isOfKind(part, kinds[i])) ? place : null;
   } catch {
     return null;
   }
+}
+
+/** Numbers of places are whole ones; 1e999 is JSON as well. */
+function isOfKind(part: unknown, kind: 'string' | 'number' | undefined): boolean {
+  return kind === 'number' ? Number.isSafeInteger(part) : typeof part === kind;
 }
 
 /** The sentence for a cursor that is none of this list. */

@@ -5,6 +5,7 @@ import {
   type DatasetPlace,
   selectDatasetPage,
   selectFacet,
+  selectFacetNames,
   selectFlagFacet,
   selectStripColumns,
   selectTotals,
@@ -72,14 +73,22 @@ async function describe(page: DatasetHead[], { window }: Selection): Promise<Dat
   const accessions = page.map(({ accession }) => accession);
   if (accessions.length === 0) return [];
   const [columns, inWindow] = await Promise.all([
-    selectStripColumns(accessions),
+    selectStripColumns(
+      page.filter((head) => keptStrip(head, window) === null).map(({ accession }) => accession),
+    ),
     window ? selectWindowCounts(accessions, window) : null,
   ]);
   return page.map((head) => {
     const isOwn = ({ accession }: { accession: number }) => accession === head.accession;
     const counts = inWindow ? countsOf(inWindow.filter(isOwn)) : allPoints(head);
-    return itemOf(head, counts, drawStrip(columns.filter(isOwn), window));
+    const strip = keptStrip(head, window) ?? drawStrip(columns.filter(isOwn), window);
+    return itemOf(head, counts, strip);
   });
+}
+
+/** The strip as it was drawn at publication; null where there is none, or where a window cuts it. */
+function keptStrip({ strip }: DatasetHead, window: Selection['window']): DatasetItem['strip'] | null {
+  return strip === null || window !== null ? null : (JSON.parse(strip) as DatasetItem['strip']);
 }
 
 function itemOf(head: DatasetHead, counts: PointCounts, strip: DatasetItem['strip']): DatasetItem {
@@ -104,10 +113,19 @@ function allPoints({ points, onCurve, warning, offCurve }: DatasetHead): PointCo
   return { points, onCurve, warning, offCurve };
 }
 
+/** The choices of a filter; what is chosen is one of them, by its name, even where it fits nothing any more. */
+async function facetWithChosen(name: 'system' | 'lab', selection: Selection): Promise<Facets['system']> {
+  const choices = await selectFacet(name, selection);
+  const missing = selection.filters[name].filter((slug) => !choices.some(({ value }) => value === slug));
+  if (missing.length === 0) return choices;
+  const named = await selectFacetNames(name, missing);
+  return [...choices, ...named.map((choice) => ({ ...choice, datasets: 0 }))];
+}
+
 async function countFacets(selection: Selection): Promise<Facets> {
   const [system, lab, ligand, flags] = await Promise.all([
-    selectFacet('system', selection),
-    selectFacet('lab', selection),
+    facetWithChosen('system', selection),
+    facetWithChosen('lab', selection),
     selectFacet('ligand', selection),
     selectFlagFacet(selection),
   ]);

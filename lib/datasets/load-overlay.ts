@@ -7,11 +7,12 @@ import { decide } from '@/lib/auth/permissions';
 import { refusal } from '@/lib/auth/refusal';
 import type { Outcome } from '@/lib/errors';
 import type { DatasetFilters } from '@/schemas/dataset-query';
+import { ACTIVITY_CELL, ENERGY_CELL_KT } from '@/schemas/density-grid';
 import type { Overlay, OverlayCells, OverlayPoints } from '@/schemas/overlay';
 import { formatAccession } from './accession';
 import { countedWindow, countsOf, selectionOf } from './dataset-filter';
 import { decodeFlags, decodeNumbers } from './decode-columns';
-import { ACTIVITY_CELL, ENERGY_CELL_KT, energyCellOf } from './density-grid';
+import { energyCellOf } from './density-grid';
 
 /** Up to this many points of all flags are sent one by one. */
 export const MOST_SINGLE_POINTS = 4000;

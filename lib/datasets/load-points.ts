@@ -27,9 +27,16 @@ export async function loadPoints(actor: Actor, accessionText: string): Promise<P
     accession,
     revision,
     note: demonstrationNote(document.abstract),
+    units: unitsOf(document),
     points: pointsOf(outcome.published),
   };
   return { ok: true, loaded: { answer, document, accession } };
+}
+
+function unitsOf({ ligands, modulators = [] }: DatasetDocument): DatasetPoints['units'] {
+  const byId = (list: { id: string; unit: string }[]) =>
+    Object.fromEntries(list.map(({ id, unit }) => [id, unit]));
+  return { energy: 'kT', ligands: byId(ligands), modulators: byId(modulators) };
 }
 
 function pointsOf({ document, assessment }: PublishedRevision): DatasetPoint[] {

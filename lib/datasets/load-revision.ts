@@ -65,6 +65,7 @@ function tombstoneOf(head: DatasetHead): Tombstone {
     lab: { slug: head.labSlug, name: head.labName },
     system: { slug: head.system, name: head.systemName },
     publishedAt: new Date(head.publishedAt).toISOString(),
-    withdrawnAt: new Date(head.stateChangedAt).toISOString(),
+    withdrawnAt: new Date(head.withdrawnAt ?? head.stateChangedAt).toISOString(),
+    reason: head.withdrawalReason,
   };
 }

@@ -7,6 +7,7 @@ import {
   insertSeries,
   upsertDataset,
 } from '@/db/queries/published';
+import { drawStrip } from './draw-strip';
 import type { EncodedDataset } from './encode-dataset';
 
 export interface Publication {
@@ -26,7 +27,8 @@ export async function publishDataset(tx: Transaction, publication: Publication):
   const { encoded, ...identity } = publication;
   const { accession, publishedAt } = identity;
   await deleteNumbers(tx, accession);
-  await upsertDataset(tx, { ...identity, ...encoded.summary, updatedAt: publishedAt });
+  const strip = JSON.stringify(drawStrip(encoded.series, null));
+  await upsertDataset(tx, { ...identity, ...encoded.summary, updatedAt: publishedAt, strip });
   await insertSeries(tx, accession, encoded.series);
   await insertCells(tx, accession, encoded.cells);
   await insertOffCurvePoints(tx, accession, encoded.offCurve);

@@ -26,6 +26,12 @@ export function writePoints(loaded: LoadedPoints, format: PointFormat): string {
   return writeCsv(loaded, document);
 }
 
+/**
+ * A text that a spreadsheet would run: one that begins like a formula, behind whatever it passes over, in the signs of
+ * East Asian keyboards as well. Numbers, negative ones too, stay numbers.
+ */
+const FORMULA = /^\s*[=+\-@\t\r\n＝＋－＠]/;
+
 const NUMBERS = [
   ['energy_kT', 'energy'],
   ['energy_u_kT', 'energyU'],
@@ -44,7 +50,7 @@ function writeCsv({ answer }: LoadedPoints, document: DatasetDocument): string {
   const { ligands, modulators = [], series } = document;
   const names = new Map(series.map(({ id, label, variant }) => [id, { label, variant }]));
   const heading = [
-    ...['accession', 'series', 'label', 'variant', 'point'],
+    ...['accession', 'series', 'label', 'variant', 'point', 'index'],
     ...ligands.map(({ id, unit }) => `ligand ${id} (${unit})`),
     ...modulators.map(({ id, unit }) => `modulator ${id} (${unit})`),
     ...NUMBERS.map(([column]) => column),
@@ -52,13 +58,13 @@ function writeCsv({ answer }: LoadedPoints, document: DatasetDocument): string {
   ];
   const rows = answer.points.map((point) => [
     ...[answer.accession, point.series, names.get(point.series)?.label, names.get(point.series)?.variant],
-    point.index,
+    // Counted from 1 as on the page, and from 0 as in the document.
+    ...[point.index + 1, point.index],
     ...ligands.map(({ id }) => point.ligands[id] ?? 0),
     // A modulator that was left out stands at its reference, which may differ from series to series.
     ...modulators.map(({ id }) => point.modulators[id] ?? ''),
     ...NUMBERS.map(([, key]) => point[key]),
     ...[point.flag, point.uncertainty, answer.note ?? ''],
   ]);
-  // A spreadsheet would run a text that begins like a formula; numbers, negative ones too, stay numbers.
-  return `${Papa.unparse([heading, ...rows], { escapeFormulae: true })}\r\n`;
+  return `${Papa.unparse([heading, ...rows], { escapeFormulae: FORMULA })}\r\n`;
 }

@@ -13,12 +13,17 @@ export interface AssessedDocument {
   policy: number;
 }
 
-/** Assesses a document. Where it is not valid: the failure with all that is wrong. */
+/**
+ * Assesses a document. Where it is not valid: the failure with all that is wrong.
+ *
+ * @param pointsBudget how many points it may have; as many as a valid document can have where left out
+ */
 export async function assessForDeposit(
   document: string,
   signal: AbortSignal,
+  pointsBudget = MOST_POINTS,
 ): Promise<Outcome<AssessedDocument>> {
-  const answer = await computeInPool(new TextEncoder().encode(document), MOST_POINTS, signal);
+  const answer = await computeInPool(new TextEncoder().encode(document), pointsBudget, signal);
   switch (answer.kind) {
     case 'assessed':
       return kept(new TextDecoder().decode(answer.body));
@@ -26,9 +31,10 @@ export async function assessForDeposit(
       const { detail, errors } = problemIn(answer.body);
       return failed('invalid-document', detail, { errors });
     }
-    case 'over-budget':
-      // A valid document has no more points than that.
-      throw new Error(`A valid document has ${answer.points} points.`);
+    case 'over-budget': {
+      const detail = `The document has ${answer.points} points; ${pointsBudget} are left for this minute.`;
+      return failed('too-many-points', detail);
+    }
     case 'aborted':
       return failed('incomplete-body');
     case 'busy':

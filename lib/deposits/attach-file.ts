@@ -1,21 +1,20 @@
 /** The verb that keeps an original file with a draft: streamed to the store, its SHA-256 checked on the way. */
-import { randomBytes } from 'node:crypto';
-import { Readable } from 'node:stream';
+import { createHash } from 'node:crypto';
+import type { Readable } from 'node:stream';
 import { readDatabase, type Transaction, write } from '@/db/client';
 import type { DepositHead, Reader } from '@/db/queries/deposits';
 import { countFiles, type FileRow, insertFile } from '@/db/queries/files';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
 import { recordAudit } from '@/lib/audit/record';
 import { type Actor, actorKey } from '@/lib/auth/actor';
 import { newId } from '@/lib/auth/hash-token';
 import { failed, type Outcome } from '@/lib/errors';
-import { log } from '@/lib/log';
 import { MOST_FILE_BYTES } from '@/lib/serving/body-bounds';
-import { idempotencyOf, once } from '@/lib/serving/idempotency';
-import { ObjectTooLarge, putObject } from '@/storage/objects';
-import { detectMediaType, HEAD_BYTES } from './detect-media-type';
-import { forgetObjects } from './forget-objects';
-import { auditingRefusals, auditSubject, reachDeposit } from './reach-deposit';
+import { earlierOutcome, idempotencyOf, isKeyUsed, once } from '@/lib/serving/idempotency';
+import { forgetObjects, keepObject, newObjectKey } from './loose-objects';
+import { auditSubject, reachDeposit } from './reach-deposit';
 import { isEditable, stateWords } from './states';
+import { type StoredUpload, storeUpload } from './store-upload';
 
 /** Most files of one deposit. */
 const MOST_FILES = 100;
@@ -37,18 +36,61 @@ type Attached = Outcome<{ file: FileRow }>;
 export function attachFile(call: Attachment): Promise<Attached> {
   const refusal = { actor: call.actor, action: 'attach-file', subject: auditSubject(call.id) } as const;
   return auditingRefusals(refusal, async () => {
-    const beforehand = await reachForFiles(await readDatabase(), call);
+    const database = await readDatabase();
+    const reached = await reachDeposit(database, call.actor, 'attach-file', call.id);
+    if (!reached.ok) return reached;
+    // A repeated call is answered as the first was, whatever has become of the deposit since.
+    if (await isKeyUsed(database, keyOf(call, ''))) return answerRepeated(call);
+    const beforehand = await reachForFiles(database, call);
     return beforehand.ok ? storeAndNote(call) : beforehand;
   });
 }
 
+/** What the call came to the first time, where the same bytes come again; they are read and not stored. */
+async function answerRepeated(call: Attachment): Promise<Attached> {
+  const hash = createHash('sha256');
+  let size = 0;
+  try {
+    for await (const chunk of call.stream as AsyncIterable<Buffer>) {
+      size += chunk.byteLength;
+      if (size > MOST_FILE_BYTES) return failed('file-too-large');
+      hash.update(chunk);
+    }
+  } catch {
+    return failed('incomplete-body');
+  }
+  const sha256 = hash.digest('hex');
+  if ((call.sha256 ?? sha256) !== sha256) return failed('digest-mismatch');
+  const earlier = await earlierOutcome<Extract<Attached, { ok: true }>>(
+    await readDatabase(),
+    keyOf(call, sha256),
+  );
+  return earlier ?? failed('conflict');
+}
+
+/** What stands for the call under its key; the key's own hash does not depend on the bytes. */
+function keyOf({ actor, id, name, idempotencyKey = null }: Attachment, sha256: string) {
+  return idempotencyOf(actor, `attach-file ${id}`, idempotencyKey, name, sha256);
+}
+
 async function storeAndNote(call: Attachment): Promise<Attached> {
-  const objectKey = `file-${randomBytes(16).toString('hex')}`;
-  const stored = await store(call, objectKey);
-  if (!stored.ok) return stored;
+  const objectKey = await newObjectKey();
+  const stored = await storeUpload(call, objectKey);
+  const noted = stored.ok ? await noteStored(call, fileOf(call, objectKey, stored)) : stored;
+  // Refused, broken off, or kept already by an earlier call under the same key. What throws may have been kept: where
+  // it was not, the object is swept as a loose one.
+  const isKept = noted.ok && noted.file.objectKey === objectKey;
+  if (!isKept) await forgetObjects([objectKey]);
+  return noted;
+}
+
+function noteStored(call: Attachment, file: FileRow): Promise<Attached> {
+  return write('acknowledged', (tx) => note(tx, call, file));
+}
+
+function fileOf({ actor, id, name }: Attachment, objectKey: string, stored: StoredUpload): FileRow {
   const { size, sha256, mediaType } = stored;
-  const { actor, id, name } = call;
-  const file: FileRow = {
+  return {
     id: newId(),
     depositId: id,
     name,
@@ -59,63 +101,14 @@ async function storeAndNote(call: Attachment): Promise<Attached> {
     uploadedBy: actorKey(actor),
     uploadedAt: Date.now(),
   };
-  let kept = false;
-  try {
-    const noted = await write('acknowledged', (tx) => note(tx, call, file));
-    kept = noted.ok && noted.file.objectKey === objectKey;
-    return noted;
-  } finally {
-    // Refused, or kept already by an earlier call under the same key.
-    if (!kept) await forgetObjects([objectKey]);
-  }
-}
-
-async function store(
-  { stream, sha256: declared = null }: Attachment,
-  objectKey: string,
-): Promise<Outcome<{ size: number; sha256: string; mediaType: string }>> {
-  const head = headOf(stream);
-  try {
-    const stored = await putObject(objectKey, Readable.from(head.passing()), MOST_FILE_BYTES);
-    if (declared === null || declared === stored.sha256) {
-      return { ok: true, ...stored, mediaType: detectMediaType(head.bytes()) };
-    }
-    await forgetObjects([objectKey]);
-    return failed('digest-mismatch');
-  } catch (error) {
-    if (error instanceof ObjectTooLarge) return failed('file-too-large');
-    if (head.brokeOff()) return failed('incomplete-body');
-    log().error({ err: error }, 'a file could not be stored');
-    return failed('unavailable');
-  }
-}
-
-/** Hands a stream on and keeps its first bytes, and whether it was the stream itself that broke. */
-function headOf(stream: Readable) {
-  const pieces: Buffer[] = [];
-  let length = 0;
-  let broke = false;
-  async function* passing(): AsyncGenerator<Buffer> {
-    try {
-      for await (const chunk of stream as AsyncIterable<Buffer>) {
-        if (length < HEAD_BYTES) pieces.push(Buffer.from(chunk.subarray(0, HEAD_BYTES - length)));
-        length += chunk.byteLength;
-        yield chunk;
-      }
-    } catch (error) {
-      broke = true;
-      throw error;
-    }
-  }
-  return { passing, bytes: () => Buffer.concat(pieces), brokeOff: () => broke };
 }
 
 function note(tx: Transaction, call: Attachment, file: FileRow): Promise<Attached> {
-  const { actor, id, idempotencyKey = null } = call;
-  const idempotency = idempotencyOf(actor, `attach-file ${id}`, idempotencyKey, file.name, file.sha256);
-  return once(tx, idempotency, async () => {
+  const { actor, id } = call;
+  return once(tx, keyOf(call, file.sha256), async () => {
     const reached = await reachForFiles(tx, call);
     if (!reached.ok) return reached;
+    if (!(await keepObject(tx, file.objectKey))) return failed('unavailable');
     await insertFile(tx, file);
     const detail = `${file.id} sha256 ${file.sha256}`;
     await recordAudit(tx, { actor, action: 'file-attached', subject: auditSubject(id), detail });

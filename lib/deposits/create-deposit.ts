@@ -2,15 +2,18 @@
 import { readDatabase, write } from '@/db/client';
 import { type DepositHead, insertDeposit, selectDeposit } from '@/db/queries/deposits';
 import { selectLaboratoryBySlug } from '@/db/queries/laboratories';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
 import { recordAudit } from '@/lib/audit/record';
 import { type Actor, actorKey } from '@/lib/auth/actor';
 import { newId } from '@/lib/auth/hash-token';
+import { refusalOf } from '@/lib/auth/refusal';
 import type { DocumentError } from '@/lib/documents/document-error';
 import { failed, type Outcome } from '@/lib/errors';
 import { earlierOutcome, idempotencyOf, once } from '@/lib/serving/idempotency';
 import type { BodyResult } from '@/lib/serving/read-body';
 import { judgeDraft } from './judge-draft';
-import { auditingRefusals, auditSubject, refusalOf } from './reach-deposit';
+import { auditSubject } from './reach-deposit';
+import { withUnlistedSystem } from './unlisted-system';
 
 export interface NewDeposit {
   actor: Actor;
@@ -63,14 +66,16 @@ async function createIn(
         title,
         system,
         errors: JSON.stringify(errors),
+        errorCount: errors.length,
         createdBy: actorKey(actor),
         createdAt: now,
         updatedAt: now,
+        updatedBy: actorKey(actor),
       });
       await recordAudit(tx, { actor, action: 'created', subject: auditSubject(id), detail: 'draft' });
       const deposit = await selectDeposit(tx, id);
       if (deposit === undefined) throw new Error('A deposit that was just made is not there.');
-      return { ok: true, deposit, errors };
+      return { ok: true, deposit, errors: await withUnlistedSystem(tx, deposit, errors) };
     }),
   );
 }

@@ -3,13 +3,15 @@ import { write } from '@/db/client';
 import { removeDeposit } from '@/db/queries/deposits';
 import { deleteFiles, selectFiles } from '@/db/queries/files';
 import { deleteRevisions } from '@/db/queries/revisions';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
 import { recordAudit } from '@/lib/audit/record';
 import type { Actor } from '@/lib/auth/actor';
 import { failed, type Outcome } from '@/lib/errors';
 import { type ExpectedVersions, versionRefusal } from '@/lib/serving/if-match';
-import { forgetObjects } from './forget-objects';
-import { auditingRefusals, auditSubject, reachDeposit } from './reach-deposit';
+import { forgetObjects, loosenObjects } from './loose-objects';
+import { auditSubject, reachDeposit, signInFirst } from './reach-deposit';
 import { stateWords } from './states';
+import { versionFailure } from './version-failure';
 
 /** Removes a draft. One that a curator has answered is none any more and stays. */
 export async function deleteDraft(call: {
@@ -18,8 +20,9 @@ export async function deleteDraft(call: {
   expected: ExpectedVersions;
 }): Promise<Outcome<object>> {
   const { actor, id } = call;
-  const removed = await auditingRefusals({ actor, action: 'delete-draft', subject: auditSubject(id) }, () =>
-    removeRows(call),
+  const removed = await auditingRefusals(
+    { actor, action: 'delete-draft', subject: auditSubject(id) },
+    async () => signInFirst(actor, 'delete-draft') ?? removeRows(call),
   );
   if (!removed.ok) return removed;
   await forgetObjects(removed.objectKeys);
@@ -43,9 +46,10 @@ function removeRows({
       return failed('conflict', `The deposit is ${stateWords(from)}; only a draft can be deleted.`);
     }
     const refusal = versionRefusal(expected, version);
-    if (refusal !== null) return failed(refusal);
+    if (refusal !== null) return versionFailure(refusal, reached.deposit);
     const objectKeys = (await selectFiles(tx, id)).map((file) => file.objectKey);
     await deleteFiles(tx, id);
+    await loosenObjects(tx, objectKeys);
     await deleteRevisions(tx, id);
     if (!(await removeDeposit(tx, { id, version, from })))
       throw new Error('The draft changed under a write.');

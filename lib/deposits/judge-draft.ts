@@ -2,9 +2,10 @@
 import { computeInPool } from '@/lib/assessments/assessment-pool';
 import type { DocumentError } from '@/lib/documents/document-error';
 import { failed, type Outcome } from '@/lib/errors';
+import { plainLine } from '@/schemas/plain-text';
 import type { Problem } from '@/schemas/problem';
 
-/** Longest title that lists show. */
+/** Longest title that lists show, in characters. */
 const MOST_TITLE = 300;
 
 /** A system's slug is never longer; more than that is no slug. */
@@ -68,5 +69,5 @@ export function problemIn(body: Uint8Array): Problem {
 }
 
 function shortText(value: unknown, most: number): string {
-  return typeof value === 'string' ? value.trim().slice(0, most) : '';
+  return typeof value === 'string' ? plainLine(value, most) : '';
 }

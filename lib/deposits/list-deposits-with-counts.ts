@@ -1,7 +1,7 @@
 /** Lists the deposits of the actor's laboratories, each with what its newest revision amounts to. */
 import { readDatabase } from '@/db/client';
 import type { DepositHead } from '@/db/queries/deposits';
-import { selectRevisions } from '@/db/queries/revisions';
+import { selectNewestSummaries } from '@/db/queries/revisions';
 import type { AssessmentSummary } from '@/lib/engine/assessment';
 import type { Outcome } from '@/lib/errors';
 import { listDeposits } from './list-deposits';
@@ -17,11 +17,12 @@ export async function listDepositsWithCounts(
 ): Promise<Outcome<{ deposits: CountedDeposit[]; next: string | null }>> {
   const listed = await listDeposits(call);
   if (!listed.ok) return listed;
-  const deposits = await Promise.all(listed.deposits.map(withCounts));
+  const ids = listed.deposits.map(({ id }) => id);
+  const summaries = await selectNewestSummaries(await readDatabase(), ids);
+  const deposits = listed.deposits.map((deposit) => withCounts(deposit, summaries.get(deposit.id)));
   return { ok: true, deposits, next: listed.next };
 }
 
-async function withCounts(deposit: DepositHead): Promise<CountedDeposit> {
-  const [newest] = await selectRevisions(await readDatabase(), deposit.id);
-  return { ...deposit, summary: newest ? (JSON.parse(newest.summary) as AssessmentSummary) : null };
+function withCounts(deposit: DepositHead, summary: string | undefined): CountedDeposit {
+  return { ...deposit, summary: summary === undefined ? null : (JSON.parse(summary) as AssessmentSummary) };
 }

@@ -1,9 +1,10 @@
 /** Lists the deposits of the actor's laboratories, a page at a time. */
 import { readDatabase } from '@/db/client';
 import { type DepositHead, type ListPlace, selectDepositsOf } from '@/db/queries/deposits';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
 import type { Actor } from '@/lib/auth/actor';
+import { refusalOf } from '@/lib/auth/refusal';
 import { failed, type Outcome } from '@/lib/errors';
-import { refusalOf } from './reach-deposit';
 import type { DepositState } from './states';
 
 const MOST_ROWS = 100;
@@ -16,13 +17,20 @@ export interface DepositList {
 }
 
 /** Deposits of all laboratories of the actor, the last changed first. */
-export async function listDeposits(call: {
+export function listDeposits(call: ListCall): Promise<Outcome<DepositList>> {
+  const refused = { actor: call.actor, action: 'see-own-deposits', subject: 'deposits:' } as const;
+  return auditingRefusals(refused, () => listOwn(call));
+}
+
+interface ListCall {
   actor: Actor;
   state?: DepositState;
   cursor?: string;
   /** 1 to 100 */
   limit?: number;
-}): Promise<Outcome<DepositList>> {
+}
+
+async function listOwn(call: ListCall): Promise<Outcome<DepositList>> {
   const { actor, state, cursor, limit = USUAL_ROWS } = call;
   const refusal = refusalOf(actor, 'see-own-deposits');
   if (refusal !== null) return refusal;

@@ -1,20 +1,24 @@
 /** Loads one deposit with all that its page shows: document, what is wrong with it, revisions, decisions. */
 import { readDatabase } from '@/db/client';
 import { type DecisionRow, selectDecisions } from '@/db/queries/decisions';
-import { type DepositHead, isListedSystem, type Reader, selectDraft } from '@/db/queries/deposits';
+import { type DepositHead, type Reader, selectDraft } from '@/db/queries/deposits';
 import { type RevisionHead, selectNewestRevision, selectRevisions } from '@/db/queries/revisions';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
 import type { Actor } from '@/lib/auth/actor';
 import { may } from '@/lib/auth/permissions';
 import type { DocumentError } from '@/lib/documents/document-error';
 import { failed, type Outcome } from '@/lib/errors';
-import { auditingRefusals, auditSubject, reachDeposit } from './reach-deposit';
+import { auditSubject, reachDeposit } from './reach-deposit';
 import { isEditable } from './states';
-import { unlistedSystem } from './unlisted-system';
+import { withUnlistedSystem } from './unlisted-system';
 
 export interface LoadedDeposit {
+  /** as the actor may see it: title, system and errors belong to the document below */
   deposit: DepositHead;
   /** the document as it was sent, valid or not */
   document: string;
+  /** the revision that this is; null: what its laboratory is working on */
+  shown: number | null;
   /** what stands in the way of submitting it */
   errors: DocumentError[];
   revisions: RevisionHead[];
@@ -30,16 +34,15 @@ export function loadDeposit({ actor, id }: { actor: Actor; id: string }): Promis
     const database = await readDatabase();
     const reached = await reachDeposit(database, actor, 'read-deposit', id);
     if (!reached.ok) return reached;
-    const { deposit } = reached;
-    const content = seesWorkingDocument(actor, deposit)
-      ? await workingContent(database, deposit)
-      : await newestContent(database, id);
+    const content = seesWorkingDocument(actor, reached.deposit)
+      ? await workingContent(database, reached.deposit)
+      : await newestContent(database, reached.deposit);
     if (content === null) return failed('not-found');
     const [revisions, decisions] = await Promise.all([
       selectRevisions(database, id),
       selectDecisions(database, id),
     ]);
-    return { ok: true, deposit, ...content, revisions, decisions };
+    return { ok: true, ...content, revisions, decisions };
   });
 }
 
@@ -48,18 +51,18 @@ export function seesWorkingDocument(actor: Actor, { labId, state }: DepositHead)
   return isEditable(state) && may(actor, 'see-own-deposits', { labId });
 }
 
-type Content = Pick<LoadedDeposit, 'document' | 'errors'>;
+type Content = Pick<LoadedDeposit, 'deposit' | 'document' | 'shown' | 'errors'>;
 
-async function workingContent(reader: Reader, { id, system }: DepositHead): Promise<Content | null> {
-  const draft = await selectDraft(reader, id);
+async function workingContent(reader: Reader, deposit: DepositHead): Promise<Content | null> {
+  const draft = await selectDraft(reader, deposit.id);
   if (draft === undefined) return null;
-  const errors = JSON.parse(draft.errors) as DocumentError[];
-  const isNamedRight =
-    errors.some(({ pointer }) => pointer === '/system') || (await isListedSystem(reader, system));
-  return { document: draft.document, errors: isNamedRight ? errors : [...errors, unlistedSystem(system)] };
+  const errors = await withUnlistedSystem(reader, deposit, JSON.parse(draft.errors) as DocumentError[]);
+  return { deposit, document: draft.document, shown: null, errors };
 }
 
-async function newestContent(reader: Reader, id: string): Promise<Content | null> {
-  const revision = await selectNewestRevision(reader, id);
-  return revision === undefined ? null : { document: revision.document, errors: [] };
+async function newestContent(reader: Reader, deposit: DepositHead): Promise<Content | null> {
+  const revision = await selectNewestRevision(reader, deposit.id);
+  if (revision === undefined) return null;
+  const { document, title, system, number: shown } = revision;
+  return { deposit: { ...deposit, title, system, errorCount: 0 }, document, shown, errors: [] };
 }

@@ -1,14 +1,18 @@
 /** The verb that puts another document in the place of a draft's. */
 import { readDatabase, type Transaction, write } from '@/db/client';
 import { type DepositHead, type Reader, selectDeposit, updateDocument } from '@/db/queries/deposits';
-import type { Actor } from '@/lib/auth/actor';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
+import { recordAudit } from '@/lib/audit/record';
+import { type Actor, actorKey } from '@/lib/auth/actor';
 import { failed, type Outcome } from '@/lib/errors';
 import { type ExpectedVersions, versionRefusal } from '@/lib/serving/if-match';
 import type { BodyResult } from '@/lib/serving/read-body';
 import type { SavedDeposit } from './create-deposit';
 import { type JudgedDraft, judgeDraft } from './judge-draft';
-import { auditingRefusals, auditSubject, reachDeposit } from './reach-deposit';
+import { auditSubject, reachDeposit } from './reach-deposit';
 import { isEditable, stateWords } from './states';
+import { withUnlistedSystem } from './unlisted-system';
+import { versionFailure } from './version-failure';
 
 export interface DraftChange {
   actor: Actor;
@@ -44,10 +48,15 @@ async function save(
   const reached = await reachEditable(tx, actor, id, expected);
   if (!reached.ok) return reached;
   const { version, state: from } = reached.deposit;
-  const content = { document, title, system, errors: JSON.stringify(errors), updatedAt: Date.now() };
-  if (!(await updateDocument(tx, { id, version, from }, content))) return failed('stale');
+  const kept = { errors: JSON.stringify(errors), errorCount: errors.length };
+  const content = { document, title, system, ...kept };
+  const changed = { ...content, updatedAt: Date.now(), updatedBy: actorKey(actor) };
+  if (!(await updateDocument(tx, { id, version, from }, changed))) return failed('stale');
+  const detail = `version ${version + 1}`;
+  await recordAudit(tx, { actor, action: 'saved', subject: auditSubject(id), detail });
   const deposit = await selectDeposit(tx, id);
-  return deposit === undefined ? failed('not-found') : { ok: true, deposit, errors };
+  if (deposit === undefined) return failed('not-found');
+  return { ok: true, deposit, errors: await withUnlistedSystem(tx, deposit, errors) };
 }
 
 async function reachEditable(
@@ -58,10 +67,14 @@ async function reachEditable(
 ): Promise<Outcome<{ deposit: DepositHead }>> {
   const reached = await reachDeposit(reader, actor, 'edit-deposit', id);
   if (!reached.ok) return reached;
-  const { state, version } = reached.deposit;
+  const { deposit } = reached;
+  const { state, version } = deposit;
   if (!isEditable(state)) {
-    return failed('conflict', `The deposit is ${stateWords(state)}; only a draft can be changed.`);
+    return failed(
+      'conflict',
+      `The deposit is ${stateWords(state)}; only a draft, or one for which changes were requested, can be changed.`,
+    );
   }
   const refusal = versionRefusal(expected, version);
-  return refusal === null ? reached : failed(refusal);
+  return refusal === null ? reached : versionFailure(refusal, deposit);
 }

@@ -10,15 +10,17 @@ import {
   updateState,
 } from '@/db/queries/deposits';
 import { insertRevision, newestRevisionNumber } from '@/db/queries/revisions';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
 import { recordAudit } from '@/lib/audit/record';
 import { type Actor, actorKey } from '@/lib/auth/actor';
 import { failed, type Outcome } from '@/lib/errors';
 import { earlierOutcome, idempotencyOf, once } from '@/lib/serving/idempotency';
 import { type ExpectedVersions, versionRefusal } from '@/lib/serving/if-match';
 import { type AssessedDocument, assessForDeposit } from './assess-for-deposit';
-import { auditingRefusals, auditSubject, reachDeposit } from './reach-deposit';
+import { auditSubject, reachDeposit } from './reach-deposit';
 import { isEditable, stateWords } from './states';
-import { unlistedSystem } from './unlisted-system';
+import { withUnlistedSystem } from './unlisted-system';
+import { versionFailure } from './version-failure';
 
 export interface Submission {
   actor: Actor;
@@ -42,9 +44,10 @@ async function assessAndSubmit(call: Submission): Promise<Outcome<Submitted>> {
   const database = await readDatabase();
   const reached = await reachDeposit(database, actor, 'submit-deposit', id);
   if (!reached.ok) return reached;
-  const idempotency = idempotencyOf(actor, `submit-deposit ${id}`, idempotencyKey);
+  const seen = JSON.stringify(call.expected ?? null);
+  const idempotency = idempotencyOf(actor, `submit-deposit ${id}`, idempotencyKey, seen);
   const earlier = await earlierOutcome<Submitted>(database, idempotency);
-  if (earlier !== null) return earlier;
+  if (earlier !== null) return stillSubmitted(earlier, reached.deposit);
   const ready = await readyToSubmit(database, call);
   if (!ready.ok) return ready;
   const draft = await selectDraft(database, id);
@@ -55,6 +58,13 @@ async function assessAndSubmit(call: Submission): Promise<Outcome<Submitted>> {
   return write('acknowledged', (tx) =>
     once(tx, idempotency, () => snapshot(tx, call, { ...checked, ...draft })),
   );
+}
+
+/** What the key did is told again, but not that it is submitted of what has come back to the laboratory since. */
+function stillSubmitted(earlier: Outcome<Submitted>, { state }: DepositHead): Outcome<Submitted> {
+  if (!earlier.ok || !isEditable(state)) return earlier;
+  const detail = `This key submitted revision ${earlier.revision}, which has come back since; take a new key to submit again.`;
+  return failed('idempotency-mismatch', detail);
 }
 
 async function readyToSubmit(
@@ -68,7 +78,7 @@ async function readyToSubmit(
     return failed('conflict', `The deposit is ${stateWords(state)}; only a draft can be submitted.`);
   }
   const refusal = expected === null ? null : versionRefusal(expected, version);
-  return refusal === null ? reached : failed(refusal);
+  return refusal === null ? reached : versionFailure(refusal, reached.deposit);
 }
 
 /** Adds to what is wrong that the system is not listed, where it is not. */
@@ -79,9 +89,8 @@ async function withSystemChecked(
 ): Promise<Outcome<AssessedDocument>> {
   if (!assessed.ok && assessed.failure.code !== 'invalid-document') return assessed;
   const known = assessed.ok ? [] : (assessed.failure.members?.errors ?? []);
-  if (known.some(({ pointer }) => pointer === '/system') || (await isListedSystem(reader, slug)))
-    return assessed;
-  const errors = [...known, unlistedSystem(slug)];
+  const errors = await withUnlistedSystem(reader, { system: slug }, known);
+  if (errors.length === known.length) return assessed;
   const detail =
     errors.length === 1
       ? 'One thing is wrong in the document.'
@@ -97,18 +106,20 @@ async function snapshot(
   const ready = await readyToSubmit(tx, call);
   if (!ready.ok) return ready;
   const { actor, id } = call;
-  const { state: from, version } = ready.deposit;
+  const { state: from, version, title, system } = ready.deposit;
   const { document, assessment, summary, engine, policy } = assessed;
-  if (version !== assessed.version || !(await isListedSystem(tx, ready.deposit.system))) {
+  if (version !== assessed.version || !(await isListedSystem(tx, system))) {
     return failed('conflict', 'The document was changed while it was being assessed; submit it again.');
   }
   const now = Date.now();
   const number = (await newestRevisionNumber(tx, id)) + 1;
-  if (!(await updateState(tx, { id, version, from }, { state: 'submitted', updatedAt: now })))
-    return failed('conflict');
+  const to = { state: 'submitted', updatedAt: now, updatedBy: actorKey(actor) } as const;
+  if (!(await updateState(tx, { id, version, from }, to))) return failed('conflict');
   await insertRevision(tx, {
     depositId: id,
     number,
+    title,
+    system,
     document,
     sha256: createHash('sha256').update(document).digest('hex'),
     assessment,

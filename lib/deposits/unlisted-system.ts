@@ -1,7 +1,18 @@
+/** What is wrong with a document as far as a submission goes: what a check finds, and a system that is not listed. */
+import { isListedSystem, type Reader } from '@/db/queries/deposits';
 import type { DocumentError } from '@/lib/documents/document-error';
 
-/** What is said of a document whose system is not listed: a check takes any, a submission does not. */
-export function unlistedSystem(slug: string): DocumentError {
+/** What is found, and that the system is not listed where it is not: a check takes any, a submission does not. */
+export async function withUnlistedSystem(
+  reader: Reader,
+  { system }: { system: string },
+  found: DocumentError[],
+): Promise<DocumentError[]> {
+  const isTold = found.some(({ pointer }) => pointer === '/system');
+  return isTold || (await isListedSystem(reader, system)) ? found : [...found, unlistedSystem(system)];
+}
+
+function unlistedSystem(slug: string): DocumentError {
   const named = slug === '' ? '' : `“${slug}” `;
   return {
     pointer: '/system',

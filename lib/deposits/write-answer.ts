@@ -1,4 +1,5 @@
 /** Deposits and files in the form that the API sends. */
+import { createHash } from 'node:crypto';
 import type { DecisionRow } from '@/db/queries/decisions';
 import type { DepositHead } from '@/db/queries/deposits';
 import type { FileRow } from '@/db/queries/files';
@@ -30,6 +31,8 @@ export function headAnswer(deposit: DepositHead): DepositHeadAnswer {
     errorCount,
     createdAt: instant(deposit.createdAt),
     updatedAt: instant(deposit.updatedAt),
+    updatedBy: deposit.savedBy,
+    publication: publicationOf(deposit),
     links: {
       self,
       submission: `${self}/submission`,
@@ -40,15 +43,39 @@ export function headAnswer(deposit: DepositHead): DepositHeadAnswer {
   };
 }
 
+/** The day for which an accepted deposit waits; null where there is none. */
+export function publicationOf({
+  publishOn,
+  publishZone,
+}: Pick<DepositHead, 'publishOn' | 'publishZone'>): DepositHeadAnswer['publication'] {
+  return publishOn === null ? null : { day: publishOn, timeZone: publishZone ?? 'UTC' };
+}
+
 /** The whole deposit as JSON. The document is put in as it was sent: it is neither read nor written anew. */
-export function depositJson({ deposit, document, errors, revisions, decisions }: LoadedDeposit): string {
+export function depositJson(loaded: LoadedDeposit): string {
+  return `${aroundJson(loaded).slice(0, -1)},"document":${withoutMark(loaded.document)}}`;
+}
+
+/**
+ * The strong ETag of a whole deposit: the version first, which is what If-Match reads; then whose view it is, the
+ * laboratory's or that of a revision; then all that stands around the document, names and listings with it.
+ */
+export function depositEtag(loaded: LoadedDeposit): string {
+  const { deposit, shown } = loaded;
+  const view = shown === null ? 'w' : `r${shown}`;
+  const around = createHash('sha256').update(aroundJson(loaded)).digest('base64url').slice(0, 16);
+  return `"${deposit.version}-${view}-${around}"`;
+}
+
+/** All but the document. */
+function aroundJson({ deposit, errors, revisions, decisions }: LoadedDeposit): string {
   const around: Omit<DepositAnswer, 'document'> = {
     ...headAnswer(deposit),
     errors,
     revisions: revisions.map(revisionAnswer),
     decisions: decisions.map(decisionAnswer),
   };
-  return `${JSON.stringify(around).slice(0, -1)},"document":${withoutMark(document)}}`;
+  return JSON.stringify(around);
 }
 
 /** A file without its bytes. */

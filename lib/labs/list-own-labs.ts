@@ -5,10 +5,11 @@ import {
   selectLaboratories,
   selectMembers,
 } from '@/db/queries/laboratories';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
 import type { Actor } from '@/lib/auth/actor';
-import { decide, may } from '@/lib/auth/permissions';
-import { refusal } from '@/lib/auth/refusal';
-import type { Failure } from '@/lib/errors';
+import { may } from '@/lib/auth/permissions';
+import { refusalOf } from '@/lib/auth/refusal';
+import type { Outcome } from '@/lib/errors';
 import { type ListedToken, listTokens } from './list-tokens';
 
 export interface OwnLab {
@@ -21,18 +22,19 @@ export interface OwnLab {
   tokens: ListedToken[] | null;
 }
 
-export type ListOwnLabsOutcome = { ok: true; labs: OwnLab[] } | { ok: false; failure: Failure };
-
 /** Each with its members, and with its tokens where the person may manage them; by name. */
-export async function listOwnLabs(actor: Actor): Promise<ListOwnLabsOutcome> {
-  const decision = decide(actor, 'see-lab');
-  if (decision !== 'allowed') return { ok: false, failure: refusal(decision) };
-  const rows = await selectLaboratories();
-  const own = rows.filter(({ id }) => may(actor, 'see-lab', { labId: id }));
-  return { ok: true, labs: await Promise.all(own.map((row) => ownLab(actor, row))) };
+export function listOwnLabs(actor: Actor): Promise<Outcome<{ labs: OwnLab[] }>> {
+  return auditingRefusals({ actor, action: 'see-lab', subject: 'laboratories:' }, async () => {
+    const refused = refusalOf(actor, 'see-lab');
+    if (refused !== null) return refused;
+    const rows = await selectLaboratories();
+    const own = rows.filter(({ id }) => may(actor, 'see-lab', { labId: id }));
+    return { ok: true, labs: await Promise.all(own.map((row) => ownLab(actor, row))) };
+  });
 }
 
 async function ownLab(actor: Actor, { id, slug, name, institution }: LaboratoryRow): Promise<OwnLab> {
-  const [members, listed] = await Promise.all([selectMembers(id), listTokens(actor, id)]);
-  return { id, slug, name, institution, members, tokens: listed.ok ? listed.tokens : null };
+  const manages = may(actor, 'manage-tokens', { labId: id });
+  const [members, listed] = await Promise.all([selectMembers(id), manages ? listTokens(actor, id) : null]);
+  return { id, slug, name, institution, members, tokens: listed?.ok ? listed.tokens : null };
 }

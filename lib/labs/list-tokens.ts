@@ -1,9 +1,9 @@
 /** The tokens of a laboratory, as its manager sees them: never the tokens themselves. */
 import { selectTokensOf } from '@/db/queries/lab-tokens';
+import { auditingRefusals } from '@/lib/audit/audit-refusals';
 import { type Actor, LAB_TOKEN_SCOPES, type LabTokenScope } from '@/lib/auth/actor';
-import { decide } from '@/lib/auth/permissions';
-import { refusal } from '@/lib/auth/refusal';
-import type { Failure } from '@/lib/errors';
+import { refusalOf } from '@/lib/auth/refusal';
+import type { Outcome } from '@/lib/errors';
 
 export interface ListedToken {
   id: string;
@@ -18,23 +18,24 @@ export interface ListedToken {
   state: 'live' | 'expired' | 'revoked';
 }
 
-export type ListTokensOutcome = { ok: true; tokens: ListedToken[] } | { ok: false; failure: Failure };
-
 /** All tokens that the laboratory ever had, newest first. */
-export async function listTokens(
+export function listTokens(
   actor: Actor,
   labId: string,
   nowMs = Date.now(),
-): Promise<ListTokensOutcome> {
-  const decision = decide(actor, 'manage-tokens', { labId });
-  if (decision !== 'allowed') return { ok: false, failure: refusal(decision) };
-  const rows = await selectTokensOf(labId);
-  const tokens = rows.map(({ labId: _, revokedAt, scopes, ...row }) => ({
-    ...row,
-    scopes: LAB_TOKEN_SCOPES.filter((scope) => scopes.includes(scope)),
-    state: stateOf(revokedAt, row.expiresAt, nowMs),
-  }));
-  return { ok: true, tokens };
+): Promise<Outcome<{ tokens: ListedToken[] }>> {
+  const refused = { actor, action: 'manage-tokens', subject: `laboratory:${labId}` } as const;
+  return auditingRefusals(refused, async () => {
+    const refusal = refusalOf(actor, 'manage-tokens', { labId });
+    if (refusal !== null) return refusal;
+    const rows = await selectTokensOf(labId);
+    const tokens = rows.map(({ labId: _, revokedAt, scopes, ...row }) => ({
+      ...row,
+      scopes: LAB_TOKEN_SCOPES.filter((scope) => scopes.includes(scope)),
+      state: stateOf(revokedAt, row.expiresAt, nowMs),
+    }));
+    return { ok: true, tokens };
+  });
 }
 
 function stateOf(revokedAt: number | null, expiresAt: number, nowMs: number): ListedToken['state'] {

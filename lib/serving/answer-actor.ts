@@ -11,6 +11,9 @@ const READS = ['GET', 'HEAD', 'OPTIONS'];
 /** Seconds after which a caller may try again what was not possible just now. */
 const RETRY_SECONDS = 2;
 
+const BAD_TOKEN =
+  'The token in the Authorization header is not valid: it is mistyped, over or revoked. Send it as “Bearer ckt_…”.';
+
 type ActorHandler<Context extends unknown[]> = (
   call: { request: Request; actor: Actor },
   ...context: Context
@@ -27,7 +30,10 @@ export function answeringActor<Context extends unknown[]>(handler: ActorHandler<
     if (mayBeForged && isFromAnotherSite(request.headers, env().appUrl)) {
       return problemResponse({ code: 'cross-site' });
     }
-    return handler({ request, actor }, ...context);
+    const response = await handler({ request, actor }, ...context);
+    return response.status === 401 && request.headers.has('authorization')
+      ? problemResponse({ code: 'unauthenticated', detail: BAD_TOKEN })
+      : response;
   });
 }
 

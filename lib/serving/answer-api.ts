@@ -30,7 +30,7 @@ export function answering<Context extends unknown[]>(handler: Handler<Context>):
   };
 }
 
-/** The handler, for whom the permission table lets in. Nobody signs in yet, so everybody is a visitor. */
+/** The handler, for whom the permission table lets in; to what answers everybody alike, everybody is a visitor. */
 export function allowing(action: Action, handler: Handler): Handler {
   return (request) => (may(VISITOR, action) ? handler(request) : problemResponse({ code: 'forbidden' }));
 }
@@ -65,10 +65,34 @@ export function matches(header: string | null, etag: string): boolean {
   return header.split(',').some((part) => ['*', etag].includes(part.trim().replace(/^W\//, '')));
 }
 
-/** JSON for the caller alone: strong ETag, and 304 where the caller has it already. */
-export function privateResponse(request: Request, json: string, etag: string): Response {
-  const headers = { ETag: etag, 'Cache-Control': 'private, no-cache, no-transform' };
+/**
+ * JSON for the caller alone: strong ETag, and 304 where the caller has it already.
+ *
+ * @param etag that of its content where left out
+ * @param more headers of the answer
+ */
+export function privateResponse(
+  request: Request,
+  json: string,
+  etag = `"${createHash('sha256').update(json).digest('base64url').slice(0, 27)}"`,
+  more: Record<string, string> = {},
+): Response {
+  const headers = { ...privateHeaders(etag), ...more };
   if (matches(request.headers.get('if-none-match'), etag))
     return new Response(null, { status: 304, headers });
   return new Response(json, { headers: { ...headers, 'Content-Type': 'application/json' } });
+}
+
+/** That the caller has what is theirs already. */
+export function privateNotModified(etag: string): Response {
+  return new Response(null, { status: 304, headers: privateHeaders(etag) });
+}
+
+function privateHeaders(etag: string) {
+  return {
+    ETag: etag,
+    'Cache-Control': 'private, no-cache, no-transform',
+    // One browser may sign in as another, whose answer is another one.
+    Vary: 'Cookie, Authorization',
+  };
 }

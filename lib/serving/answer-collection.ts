@@ -4,10 +4,14 @@
  */
 import { createHash } from 'node:crypto';
 import { selectCollectionVersion } from '@/db/queries/datasets';
+import { noteLimited } from '@/lib/audit/audit-refusals';
+import { VISITOR } from '@/lib/auth/actor';
 import type { Failed } from '@/lib/errors';
 import { problemOf, problemResponse } from '@/lib/errors';
 import type { Tombstone } from '@/schemas/dataset-answers';
+import { admitReading, readLimitHeaders } from './admit-reading';
 import { matches } from './answer-api';
+import { PEER_HEADER } from './peer';
 
 export interface CollectionBody {
   text: string;
@@ -37,12 +41,28 @@ const known = new Map<string, string>();
 const MOST_KNOWN = 2000;
 
 /**
- * The answer, or 304.
+ * The answer, or 304, or that the caller's address has read enough for the minute.
  *
  * @param form all that the body depends on besides the collection: address, parameters, media type
  * @param make makes the body, or says what is wrong
  */
 export async function collectionResponse(
+  request: Request,
+  form: string,
+  make: () => Promise<CollectionBody | (Failed & { tombstone?: Tombstone })>,
+): Promise<Response> {
+  const admission = await admitReading(request.headers.get(PEER_HEADER) ?? '');
+  if (admission === null) return answerFrom(request, form, make);
+  const { admitted, quota } = admission;
+  if (!admitted) await noteLimited(VISITOR, 'read-published');
+  const response = admitted
+    ? await answerFrom(request, form, make)
+    : problemResponse({ code: 'too-many-calls', retryAfterSeconds: quota.resetSeconds });
+  for (const [name, value] of Object.entries(readLimitHeaders(quota))) response.headers.set(name, value);
+  return response;
+}
+
+async function answerFrom(
   request: Request,
   form: string,
   make: () => Promise<CollectionBody | (Failed & { tombstone?: Tombstone })>,

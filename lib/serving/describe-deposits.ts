@@ -20,6 +20,10 @@ type Route = Omit<Parameters<Registry['registerPath']>[0], 'responses' | 'securi
 /** A lab token, or the cookie of somebody who signed in; the cookie's name depends on how the site is served. */
 const SECURITY: Record<string, string[]>[] = [{ labToken: [] }, { session: [] }];
 const ETAG = { ETag: text('The version in quotes; send it back as If-Match') };
+const READ_ETAG = {
+  ETag: text('Begins with the version; send it back as If-Match, which reads the version alone'),
+};
+const CONTENT_ETAG = { ETag: text('Changes only with the content') };
 const LOCATION = { Location: text('Address of what was made') };
 const NOT_MODIFIED: Responses = { 304: { description: 'Not changed since the ETag in If-None-Match' } };
 const GONE: Responses = { 204: { description: 'It is gone' } };
@@ -44,6 +48,7 @@ const DOCUMENT_FAILS: ErrorCode[] = [
 ];
 const WRITING_FAILS: ErrorCode[] = ['cross-site', 'forbidden'];
 const COMPUTING_FAILS: ErrorCode[] = ['busy', 'took-too-long'];
+const LIMIT_FAILS: ErrorCode[] = ['too-many-calls', 'too-many-points', 'too-many-at-once'];
 const KEY_FAILS: ErrorCode[] = ['bad-header', 'idempotency-mismatch'];
 
 /** Adds the calls by which deposits are made and decided on. */
@@ -85,6 +90,7 @@ function registerDrafts(add: Add): void {
       summary: 'A new draft from any JSON object; what is wrong with it as a document is told',
       parameters: [
         parameter('query', 'lab', 'Slug of the laboratory, for people of several'),
+        parameter('header', 'Curvekeep-Lab', 'The same, where the address has no lab'),
         IDEMPOTENCY_KEY,
       ],
       request: { body: document },
@@ -101,9 +107,13 @@ function registerDrafts(add: Add): void {
       summary: 'Deposits of the caller’s laboratories, the last changed first',
       request: { query: depositQuerySchema },
     },
-    json(200, depositListSchema, {
-      Link: text('Address of the next page, rel="next"; none on the last one'),
-    }),
+    {
+      ...json(200, depositListSchema, {
+        ...CONTENT_ETAG,
+        Link: text('Address of the next page, rel="next"; none on the last one'),
+      }),
+      ...NOT_MODIFIED,
+    },
     'bad-parameter',
     'forbidden',
   );
@@ -115,7 +125,7 @@ function registerDrafts(add: Add): void {
       summary: 'One deposit, its document in it',
       parameters: [ID],
     },
-    { ...json(200, depositSchema, ETAG), ...NOT_MODIFIED },
+    { ...json(200, depositSchema, READ_ETAG), ...NOT_MODIFIED },
   );
   add(
     {
@@ -151,7 +161,14 @@ function registerSubmissions(add: Add): void {
       path: `${ONE}/submission`,
       operationId: 'submitDeposit',
       summary: 'Submit the document as it stands: an immutable revision with its assessment',
-      parameters: [ID, IDEMPOTENCY_KEY],
+      description:
+        'Whoever submits declares, as the page asks: document and files hold no personal or patient-identifiable data, ' +
+        'and the work followed the biosafety and chemical-safety rules that apply where it was done. There is no body.',
+      parameters: [
+        ID,
+        parameter('header', 'If-Match', 'Submits only this version; another one is 412'),
+        IDEMPOTENCY_KEY,
+      ],
     },
     json(200, submittedDepositSchema, ETAG),
     ...[...WRITING_FAILS, ...COMPUTING_FAILS, ...KEY_FAILS],
@@ -177,8 +194,8 @@ function registerSubmissions(add: Add): void {
       summary: 'The assessment of the draft as it stands, or of the newest revision',
       parameters: [ID],
     },
-    { ...json(200, assessmentSchema, { ETag: text('Changes only with the content') }), ...NOT_MODIFIED },
-    ...COMPUTING_FAILS,
+    { ...json(200, assessmentSchema, CONTENT_ETAG), ...NOT_MODIFIED },
+    ...[...COMPUTING_FAILS, ...LIMIT_FAILS],
     'invalid-document',
   );
   add(
@@ -186,7 +203,8 @@ function registerSubmissions(add: Add): void {
       method: 'post',
       path: `${ONE}/decision`,
       operationId: 'decideDeposit',
-      summary: 'A curator accepts, which publishes, or asks for changes',
+      summary:
+        'A curator accepts, which publishes at once or on a day, asks for changes, or declines for good',
       parameters: [ID, IDEMPOTENCY_KEY],
       request: { body: { required: true, content: { 'application/json': { schema: decisionSchema } } } },
     },
@@ -203,7 +221,9 @@ function registerFiles(add: Add): void {
       method: 'post',
       path: `${ONE}/files`,
       operationId: 'attachFile',
-      summary: 'Keep an original file with a draft, sent as it is, at most 100 MiB',
+      summary: 'Keep an original file with a draft',
+      description:
+        'The body is the bytes of the file, 1 to 104,857,600 of them, and no form; a deposit has at most 100 files.',
       parameters: [
         ID,
         parameter('query', 'name', 'Of the file; or in Content-Disposition'),
@@ -218,6 +238,8 @@ function registerFiles(add: Add): void {
       'bad-parameter',
       'conflict',
       'file-too-large',
+      'not-plain-file',
+      'empty-file',
       'digest-mismatch',
       'incomplete-body',
       'unavailable',
@@ -231,7 +253,7 @@ function registerFiles(add: Add): void {
       summary: 'The files of a deposit',
       parameters: [ID],
     },
-    json(200, fileListSchema),
+    { ...json(200, fileListSchema, CONTENT_ETAG), ...NOT_MODIFIED },
   );
   add(
     {
@@ -246,6 +268,7 @@ function registerFiles(add: Add): void {
         description: 'The bytes, as an attachment',
         headers: {
           ETag: text('SHA-256 of the bytes'),
+          'Content-Length': text('Bytes'),
           'Repr-Digest': text('SHA-256 of the bytes (RFC 9530)'),
         },
         content: { '*/*': { schema: { type: 'string', format: 'binary' } } },

@@ -16,6 +16,10 @@ import { overlaySchema } from '@/schemas/overlay';
 import { systemListSchema, systemSchema } from '@/schemas/system';
 import { problems, type Registry, type Responses, text } from './describe-answers';
 
+const READ_LIMITS = {
+  RateLimit: text('What is left (draft-ietf-httpapi-ratelimit-headers-10)'),
+  'RateLimit-Policy': text('Reads of one address a minute'),
+};
 const ETAG = { ETag: text('Changes only with the content') };
 const LINK = { Link: text('Address of the next page, rel="next"; none on the last one') };
 const NOT_MODIFIED: Responses = { 304: { description: 'Not changed since the ETag in If-None-Match' } };
@@ -41,7 +45,7 @@ function registerLists(registry: Registry): void {
     responses: {
       ...json(datasetListSchema, LINK),
       ...NOT_MODIFIED,
-      ...problems('bad-parameter', 'unexpected'),
+      ...problems('bad-parameter', 'too-many-calls', 'unexpected'),
     },
   });
   registry.registerPath({
@@ -50,13 +54,17 @@ function registerLists(registry: Registry): void {
     operationId: 'readOverlay',
     summary: 'What the overlay plot draws of a selection',
     parameters: queryParameters(datasetFiltersSchema.shape),
-    responses: { ...json(overlaySchema), ...NOT_MODIFIED, ...problems('bad-parameter', 'unexpected') },
+    responses: {
+      ...json(overlaySchema),
+      ...NOT_MODIFIED,
+      ...problems('bad-parameter', 'too-many-calls', 'unexpected'),
+    },
   });
 }
 
 function registerDataset(registry: Registry): void {
   const failures: Responses = {
-    ...problems('not-found', 'unexpected'),
+    ...problems('not-found', 'too-many-calls', 'unexpected'),
     410: {
       description: 'The dataset was withdrawn; what is left of it',
       content: { 'application/problem+json': { schema: withdrawnSchema } },
@@ -79,7 +87,7 @@ function registerDataset(registry: Registry): void {
     responses: {
       200: {
         description: 'The document',
-        headers: ETAG,
+        headers: { ...ETAG, ...READ_LIMITS },
         content: { 'application/json': { schema: { $ref: '#/components/schemas/Dataset' } } },
       },
       ...NOT_MODIFIED,
@@ -102,8 +110,10 @@ function registerDataset(registry: Registry): void {
     ],
     responses: {
       200: {
-        description: 'The points. Invented data say so in `note`, in CSV and NDJSON on every line.',
-        headers: ETAG,
+        description:
+          'The points. `index` counts from 0 as in the document; CSV has `point` besides, which counts from 1 as the ' +
+          'page does, and the units in its heading. Invented data say so in `note`, in CSV and NDJSON on every line.',
+        headers: { ...ETAG, ...READ_LIMITS },
         content: {
           'application/json': { schema: datasetPointsSchema },
           'text/csv': { schema: { type: 'string' } },
@@ -127,7 +137,7 @@ function registerSystems(registry: Registry): void {
     responses: {
       ...json(systemListSchema, LINK),
       ...NOT_MODIFIED,
-      ...problems('bad-parameter', 'unexpected'),
+      ...problems('bad-parameter', 'too-many-calls', 'unexpected'),
     },
   });
   registry.registerPath({
@@ -136,7 +146,11 @@ function registerSystems(registry: Registry): void {
     operationId: 'readSystem',
     summary: 'One system with what is published on it',
     parameters: [pathParameter('slug', 'Slug of a listed system')],
-    responses: { ...json(systemSchema), ...NOT_MODIFIED, ...problems('not-found', 'unexpected') },
+    responses: {
+      ...json(systemSchema),
+      ...NOT_MODIFIED,
+      ...problems('not-found', 'too-many-calls', 'unexpected'),
+    },
   });
 }
 
@@ -144,7 +158,7 @@ function json(schema: z.ZodType, headers: Record<string, ReturnType<typeof text>
   return {
     200: {
       description: 'As the collection stands',
-      headers: { ...ETAG, ...headers },
+      headers: { ...ETAG, ...READ_LIMITS, ...headers },
       content: { 'application/json': { schema } },
     },
   };

@@ -46,6 +46,12 @@ export function idempotencyOf(
   return { keyHash: hashOf(actorKey(actor), call, key), bodyHash: hashOf(...body) };
 }
 
+/** Whether the key was used for that call already, whatever came with it. */
+export async function isKeyUsed(reader: Reader, idempotency: Idempotency | null): Promise<boolean> {
+  if (idempotency === null) return false;
+  return (await selectKey(reader, idempotency.keyHash, Date.now() - KEPT_MS)) !== undefined;
+}
+
 /** What the call came to earlier, or null where it was not made. To be asked before anything costly. */
 export async function earlierOutcome<T>(
   reader: Reader,

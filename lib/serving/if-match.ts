@@ -1,9 +1,9 @@
-/** `If-Match` with the versions of a deposit as strong ETags: `"3"`. */
+/** `If-Match` with the versions of a deposit: the number that its strong ETags begin with, `"3"` or `"3-w-…"`. */
 
 /** The versions that a caller takes for the present one; `any` for `*`; null where it did not say. */
 export type ExpectedVersions = readonly number[] | 'any' | null;
 
-/** The strong ETag of a version. */
+/** The strong ETag of an answer to a change that made this version. */
 export function etagOf(version: number): string {
   return `"${version}"`;
 }
@@ -15,7 +15,7 @@ export function readIfMatch(headers: Headers): ExpectedVersions {
   const parts = header.split(',').map((part) => part.trim());
   if (parts.includes('*')) return 'any';
   return parts.flatMap((part) => {
-    const digits = /^"([1-9]\d{0,14})"$/.exec(part)?.[1];
+    const digits = /^"([1-9]\d{0,14})(?:-[\w-]*)?"$/.exec(part)?.[1];
     return digits === undefined ? [] : [Number(digits)];
   });
 }

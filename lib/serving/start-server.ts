@@ -8,9 +8,12 @@ import { applyMigrations } from '@/db/apply-migrations';
 import { closeDatabase } from '@/db/client';
 import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
 import { checkEnvOrExit, type Env } from '@/lib/env';
+import { startChores } from '@/lib/jobs/run-chores';
 import { log } from '@/lib/log';
+import { endDemonstrationSessions } from '@/lib/people/demonstration-only';
 import { startLocalStorage, stopLocalStorage } from '@/storage/local-server';
 import { bodyBounds, LONGEST_BODY_MS } from './body-bounds';
+import { withLateAnswer } from './late-answer';
 import { limitBodyTime } from './limit-body-time';
 import { lingerBeforeEnd } from './linger';
 import { logRequest } from './log-request';
@@ -41,10 +44,12 @@ export async function startServer({ development }: { development: boolean }): Pr
     prepareDatabase(env),
     startLocalStorage(),
   ]);
-  if (env.demo) await loadDemonstration();
+  await (env.demo ? loadDemonstration() : endDemonstrationSessions());
   answerWith(server, handle, env);
   await listen(server, env);
+  const chores = startChores();
   stopOnSignal(server, async () => {
+    await chores.stop();
     await closeAssessmentPool();
     await closeDatabase();
     await stopLocalStorage();
@@ -68,8 +73,16 @@ async function prepareDatabase({ databaseUrl }: Env): Promise<void> {
 
 /** Loaded only here: elsewhere the server knows nothing of it. */
 async function loadDemonstration(): Promise<void> {
-  const { loadScenario } = await import('@/db/seed/load-scenario');
-  await loadScenario();
+  const { loadScenario, NotForDemonstration } = await import('@/db/seed/load-scenario');
+  const { attachDemonstrationFiles } = await import('@/db/seed/attach-files');
+  try {
+    await loadScenario();
+  } catch (error) {
+    if (!(error instanceof NotForDemonstration)) throw error;
+    process.stderr.write(`${error.message}\n`);
+    process.exit(1);
+  }
+  await attachDemonstrationFiles();
 }
 
 async function prepareNext(server: Server, env: Env, development: boolean): Promise<NextHandler> {
@@ -96,7 +109,7 @@ function answerWith(server: Server, handle: NextHandler, env: Env): void {
     logRequest(request, response);
     limitBodyTime(request, response, (error) => refuseBrokenRequest(error, request.socket, headers));
     if (refuseUnreadablePath(request, response)) return;
-    handle(request, response).catch((error: unknown) => {
+    withLateAnswer(request, response, () => handle(request, response)).catch((error: unknown) => {
       log().error({ err: error }, 'a request failed');
       response.destroy();
     });

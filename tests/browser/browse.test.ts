@@ -252,6 +252,24 @@ describeInBrowser('browsing', ({ newPage, url }) => {
   });
 
   describe('one dataset', () => {
+    it('is opened at a point off the curve: at the top, with the point marked in words and in the table', async () => {
+      const page = await open('/datasets');
+      const misses = page.getByRole('region', { name: 'Points off the curve' }).first();
+      const link = misses.getByRole('link').first();
+      const [, series, point] = /point=(\d+)\.(\d+)$/.exec((await link.getAttribute('href')) ?? '') ?? [];
+      await link.click();
+      await page.waitForURL(/\/datasets\/CK-\d+\?point=/);
+      await page.getByRole('heading', { level: 1 }).waitFor();
+      await expect.poll(() => page.evaluate(() => scrollY), SOON).toBe(0);
+      expect(Number(series)).toBeGreaterThan(0);
+      const opened = page.getByRole('region', { name: 'The point that was opened' });
+      expect(await opened.textContent()).toContain(`, point ${point}`);
+      const row = page.getByRole('region', { name: 'Points as a table' }).locator('tr[aria-current=true]');
+      expect(await row.count()).toBe(1);
+      expect(await row.textContent()).toContain(` ${point}`);
+      await page.close();
+    });
+
     it('is opened from its row, with the numbers of its assessment, and downloads', async () => {
       const page = await open('/datasets');
       const complaints = listenForComplaints(page);

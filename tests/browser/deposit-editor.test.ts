@@ -2,6 +2,7 @@
 import { AxeBuilder } from '@axe-core/playwright';
 import type { Page } from 'playwright-core';
 import { beforeAll, describe, expect, it } from 'vitest';
+import { emptyDocument } from '@/components/deposits/empty-document';
 import { describeInBrowser, listenForComplaints } from '@/tests/support/browse-app';
 import { signedIn } from '@/tests/support/sign-in';
 
@@ -12,7 +13,7 @@ const titleIn = (page: Page) => page.getByLabel('Title');
 const textIn = (page: Page) => page.getByRole('textbox', { name: 'Document as JSON' });
 const saveIn = (page: Page) => page.getByRole('button', { name: 'Save', exact: true });
 const press = (page: Page, name: string) => page.getByRole('button', { name, exact: true }).click();
-const savedAs = (page: Page, version: number) => page.getByText(`Saved as version ${version},`).waitFor();
+const saved = (page: Page) => page.getByText(/^Saved \d/).waitFor();
 
 describeInBrowser('a draft', (visit) => {
   let page: Page;
@@ -29,7 +30,7 @@ describeInBrowser('a draft', (visit) => {
     await page.getByRole('heading', { name: /^\d+ things to mend$/ }).waitFor();
     await titleIn(page).fill('Mine');
     await page.keyboard.press('Control+s');
-    await savedAs(page, 2);
+    await saved(page);
   });
 
   it('saved by somebody else meanwhile, both versions are there to choose from', async () => {
@@ -37,22 +38,22 @@ describeInBrowser('a draft', (visit) => {
     await other.goto(draft);
     await titleIn(other).fill('Theirs');
     await saveIn(other).click();
-    await savedAs(other, 3);
+    await saved(other);
     await titleIn(page).fill('Mine, longer');
     await saveIn(page).click();
-    await page.getByText('Changed by somebody else meanwhile').waitFor();
+    await page.getByText('Changed meanwhile').waitFor();
     expect(await titleIn(page).inputValue()).toBe('Mine, longer');
     await press(page, 'Load theirs, keep mine as text');
     expect(await titleIn(page).inputValue()).toBe('Theirs');
     await press(page, 'Take them up');
     expect(await titleIn(page).inputValue()).toBe('Mine, longer');
     await saveIn(page).click();
-    await savedAs(page, 4);
+    await saved(page);
     // The other one, now behind, may save over it on purpose.
     await titleIn(other).fill('Theirs again');
     await saveIn(other).click();
     await press(other, 'Save mine over theirs');
-    await savedAs(other, 5);
+    await saved(other);
     await other.close();
     await page.reload();
     expect(await titleIn(page).inputValue()).toBe('Theirs again');
@@ -67,12 +68,12 @@ describeInBrowser('a draft', (visit) => {
     await page.waitForFunction(() => sessionStorage.length > 0);
     await page.context().setOffline(false);
     await page.reload();
-    await page.getByText('Your unsaved changes are kept here').waitFor();
+    await page.getByText('Your unsaved changes are kept in this browser tab').waitFor();
     expect(await titleIn(page).inputValue()).toBe('Theirs again');
     await press(page, 'Take them up');
     expect(await titleIn(page).inputValue()).toBe('Typed in a tunnel');
     await saveIn(page).click();
-    await savedAs(page, 6);
+    await saved(page);
   });
 
   it('as JSON takes what the form has no field for, and says where it is no JSON', async () => {
@@ -88,7 +89,7 @@ describeInBrowser('a draft', (visit) => {
       .replace('"contributors": [', '"contributors": "odd", "y": [');
     await textIn(page).fill(odd);
     await saveIn(page).click();
-    await savedAs(page, 7);
+    await saved(page);
     await press(page, 'Back to the form');
     await page.getByText(/^Contributors: what this draft holds here/).waitFor();
     // A place without a field is led to in the text.
@@ -105,6 +106,57 @@ describeInBrowser('a draft', (visit) => {
     await press(page, 'Document as JSON');
     expect(await textIn(page).inputValue()).toBe(odd);
     await press(page, 'Back to the form');
+  });
+
+  it('takes replicates in the cell of the activity, and a pasted block from a cell on', async () => {
+    await page.goto(draft);
+    await press(page, 'Document as JSON');
+    await textIn(page).fill(JSON.stringify(emptyDocument('A. Person')));
+    await press(page, 'Back to the form');
+    await press(page, 'Add a point');
+    await page.getByRole('textbox', { name: 'activity of point 1' }).fill('0.41 0.44');
+    expect(await page.getByRole('textbox', { name: 'replicates of point 1' }).inputValue()).toBe('0.41 0.44');
+    await page.getByRole('textbox', { name: 'ligand of point 1' }).focus();
+    await page.evaluate(() => {
+      const clipboardData = new DataTransfer();
+      clipboardData.setData('text', '0\t0.91\t0.02\n1\t0.85\t0.03\n');
+      const event = new ClipboardEvent('paste', { clipboardData, bubbles: true, cancelable: true });
+      document.activeElement?.dispatchEvent(event);
+    });
+    await page.getByText('Points 1 to 2 are filled.').waitFor();
+    expect(await page.getByRole('textbox', { name: 'activity of point 2' }).inputValue()).toBe('0.85');
+    expect(await page.getByRole('textbox', { name: 'u of point 2' }).inputValue()).toBe('0.03');
+  });
+
+  it('asks before unsaved changes are left, and stays where that is refused', async () => {
+    const asked = page.waitForEvent('dialog');
+    const click = page.getByRole('link', { name: 'Browse', exact: true }).first().click();
+    const dialog = await asked;
+    expect(dialog.message()).toContain('Your last changes are not saved');
+    await dialog.dismiss();
+    await click;
+    expect(page.url()).toBe(draft);
+    await page.keyboard.press('Control+S');
+    await saved(page);
+  });
+
+  it('signed out meanwhile, says so, and leads back to what was typed', async () => {
+    await titleIn(page).fill('Typed while signed out');
+    await page.waitForFunction(() => sessionStorage.length > 0);
+    const cookies = await page.context().cookies();
+    await page.context().clearCookies();
+    await saveIn(page).click();
+    await page.getByText('You are signed out').waitFor();
+    const way = page.getByRole('main').getByRole('link', { name: 'Sign in' });
+    expect(await way.getAttribute('href')).toBe(
+      `/sign-in?next=${encodeURIComponent(new URL(draft).pathname)}`,
+    );
+    await page.context().addCookies(cookies);
+    await page.goto(draft);
+    await press(page, 'Take them up');
+    expect(await titleIn(page).inputValue()).toBe('Typed while signed out');
+    await saveIn(page).click();
+    await saved(page);
   });
 
   it('is deleted after a second word', async () => {

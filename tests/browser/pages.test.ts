@@ -50,7 +50,7 @@ describeInBrowser('every page', (visit) => {
     let complaints: string[];
     beforeAll(async () => {
       page = await newPage();
-      complaints = listenForComplaints(page, 404, 422);
+      complaints = listenForComplaints(page, 404, 410, 422);
       await reachState(page, visit, state);
     });
     afterAll(() => page.close());

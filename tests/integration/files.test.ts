@@ -70,6 +70,7 @@ describe('a file', () => {
       'content-disposition': `attachment; filename="Rohdaten _M _1_.bin"; filename*=UTF-8''Rohdaten%20%C2%B5M%20%221%22.bin`,
       'content-security-policy': expect.stringMatching(/default-src 'none'.*; sandbox$/),
       'x-content-type-options': 'nosniff',
+      'content-length': String(bytes.length),
       'repr-digest': digest(bytes),
     });
     const etag = back.headers.get('etag') ?? '';

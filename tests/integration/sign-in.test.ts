@@ -149,10 +149,10 @@ describe('signing in', () => {
 });
 
 describe('pages', () => {
-  it('send a visitor to sign in first', async () => {
+  it('ask a visitor to sign in, there and then', async () => {
     const response = await get('/lab');
-    expect(response.status).toBe(307);
-    expect(response.headers.get('location')).toContain('/sign-in?next=/lab');
+    expect(response.status).toBe(401);
+    expect(await response.text()).toContain('name="next" value="/lab"');
   });
 
   it.each([
@@ -194,7 +194,7 @@ describe('a session', () => {
     const out = await send('/methods', 'Sign out', {}, { cookie });
     expect(out.status).toBe(303);
     expect(sessionCookie(out)).toMatch(/^curvekeep-session=;/);
-    expect((await get('/lab', cookie)).status).toBe(307);
+    expect((await get('/lab', cookie)).status).toBe(401);
   });
 
   it('loses a membership and an account from the next request on', async () => {
@@ -211,6 +211,6 @@ describe('a session', () => {
         .set({ disabledAt: Date.now() })
         .where(eq(people.email, 'depositor@demo.example'));
     });
-    expect((await get('/lab', cookie)).status).toBe(307);
+    expect((await get('/lab', cookie)).status).toBe(401);
   });
 });

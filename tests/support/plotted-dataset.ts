@@ -27,6 +27,7 @@ export function viewOf(data: PlotData, overrides: Partial<CollapseView> = {}): C
     curves: responseCurves(data, axis),
     by: 'energy',
     lit: null,
+    marked: null,
     colours: COLOURS,
     animate: true,
     heights: { plot: 300, residual: 120 },

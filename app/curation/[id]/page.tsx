@@ -1,10 +1,11 @@
 import type { Metadata } from 'next';
 import { Review } from '@/components/curation/review';
 import { actorOfPage } from '@/lib/auth/current-actor';
-import { decide, may } from '@/lib/auth/permissions';
-import { refusal } from '@/lib/auth/refusal';
-import { loadRecord, loadRevision } from '../../deposits/load-record';
-import { turnAway } from '../../deposits/turn-away';
+import { may } from '@/lib/auth/permissions';
+import { seeQueue } from '@/lib/curation/see-queue';
+import { loadRecord, loadRevision } from '@/lib/deposits/load-record';
+import { auditSubject } from '@/lib/deposits/reach-deposit';
+import { turnAway } from '../../turn-away';
 
 export const metadata: Metadata = { title: 'Review', robots: { index: false } };
 
@@ -13,8 +14,8 @@ export default async function ReviewPage({ params }: { params: Promise<{ id: str
   const { id } = await params;
   const path = `/curation/${id}`;
   const actor = await actorOfPage();
-  const decision = decide(actor, 'see-queue');
-  if (decision !== 'allowed') return turnAway(refusal(decision), path);
+  const seen = await seeQueue(actor, auditSubject(id));
+  if (!seen.ok) return turnAway(seen.failure, path);
   const loaded = await loadRecord(actor, id);
   if (!loaded.ok) return turnAway(loaded.failure, path);
   const revision = await loadRevision(actor, loaded);

@@ -12,9 +12,9 @@ export default function NoSuchDataset() {
       }
     >
       <p>
-        An accession is like <span className="figures">CK-000123</span>, or{' '}
-        <span className="figures">CK-000123.2</span> for a certain revision. This one is not published, or not
-        in that revision.
+        An accession is like <span className="figures whitespace-nowrap">CK-000123</span>, or{' '}
+        <span className="figures whitespace-nowrap">CK-000123.2</span> for a certain revision. This one is not
+        published, or not in that revision.
       </p>
     </DeadEnd>
   );

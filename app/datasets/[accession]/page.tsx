@@ -10,6 +10,7 @@ import { openingWindow } from '@/components/plots/energy-window';
 import { actorOfPage } from '@/lib/auth/current-actor';
 import { loadDataset } from '@/lib/datasets/load-dataset';
 import { loadPoints } from '@/lib/datasets/load-points';
+import { answerWithStatus } from '@/lib/serving/late-answer';
 
 /** Up to so many points come with the page; more are asked for by the page once it stands. */
 const MOST_POINTS_WITH_PAGE = 400;
@@ -37,7 +38,10 @@ export async function generateMetadata({ params }: PageProps): Promise<Metadata>
 export default async function PublishedDatasetPage({ params }: PageProps) {
   const { accession } = await params;
   const outcome = await datasetOf(accession);
-  if (!outcome.ok && outcome.tombstone) return <TombstonePage tombstone={outcome.tombstone} />;
+  if (!outcome.ok && outcome.tombstone) {
+    answerWithStatus(410);
+    return <TombstonePage tombstone={outcome.tombstone} />;
+  }
   if (!outcome.ok) notFound();
   const { document, ...dataset } = outcome.dataset;
   const loaded = await loadPoints(await actorOfPage(), accession);

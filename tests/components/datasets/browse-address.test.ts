@@ -5,6 +5,7 @@ import {
   NO_FILTERS,
   readBrowseAddress,
   toggled,
+  windowSlip,
   wordsOf,
   writeBrowseAddress,
 } from '@/components/datasets/browse-address';
@@ -78,4 +79,17 @@ describe('choices', () => {
     expect(wordsOf('')).toEqual([]);
     expect(wordsOf('a b c d e f g h i j k l')).toHaveLength(10);
   });
+});
+
+it.each([
+  ['from=abc', /“from=abc” in the address is no energy in kT/],
+  ['to=1e9', /“to=1e9”/],
+  ['from=5&to=-5', /ends before it begins/],
+])('%s: says what cannot be meant', (query, words) => {
+  expect(windowSlip(new URLSearchParams(query))).toMatch(words);
+});
+
+it('a window that can be meant is no slip', () => {
+  for (const query of ['', 'from=-1&to=2', 'from=−3', 'to='])
+    expect(windowSlip(new URLSearchParams(query))).toBeNull();
 });

@@ -1,16 +1,21 @@
 import { renderToStaticMarkup } from 'react-dom/server';
 import { describe, expect, it, vi } from 'vitest';
-import { formatBytes } from '@/components/deposits/format-bytes';
 import { Letters } from '@/components/deposits/letters';
 import { nextStep, stateSentence } from '@/components/deposits/state-sentence';
 import { SubmitForm } from '@/components/deposits/submit-form';
+import { formatBytes } from '@/components/ui/format-bytes';
 import { DEPOSIT_STATES } from '@/schemas/deposit-states';
 
 it('every state has a sentence and a next step of its own', () => {
-  expect(new Set(DEPOSIT_STATES.map(stateSentence)).size).toBe(DEPOSIT_STATES.length);
+  expect(new Set(DEPOSIT_STATES.map((state) => stateSentence(state))).size).toBe(DEPOSIT_STATES.length);
   expect(new Set(DEPOSIT_STATES.map((state) => nextStep(state, 0))).size).toBe(DEPOSIT_STATES.length);
   expect(nextStep('draft', 1)).toBe('Mend 1 thing, then submit');
   expect(nextStep('draft', 3)).toBe('Mend 3 things, then submit');
+  const publication = { day: '2027-03-01', timeZone: 'America/Sao_Paulo' };
+  expect(nextStep('accepted', 0, publication)).toBe('Wait: published on 1 March 2027');
+  expect(stateSentence('accepted', publication)).toBe(
+    'A curator accepted it. It is published on 1 March 2027, at midnight (America/Sao Paulo); until then only your laboratory and the curators see it.',
+  );
 });
 
 it.each([
@@ -31,7 +36,13 @@ describe('submitting', () => {
     expect(html(null)).toContain('no personal or patient-identifiable data');
     expect(html(null)).toContain('biosafety and chemical-safety rules');
     expect(html(null)).toContain('local rules and licensed practice come first');
-    expect(html(null)).toMatch(/<button type="submit"[^>]*disabled=""|<button disabled=""[^>]*type="submit"/);
+  });
+
+  it('stays reachable while it does nothing, and says why', () => {
+    const described = /<button aria-disabled="true" aria-describedby="([^"]+)"/.exec(html(null));
+    expect(html(null)).not.toContain('disabled=""');
+    expect(html(null)).toContain(`<p id="${described?.[1]}"`);
+    expect(html(null)).toContain('Confirm both sentences first.');
   });
 
   it('says what is in the way', () => {

@@ -25,7 +25,9 @@ describe('the chart’s option', () => {
     const { grid, xAxis } = seen(viewOf(data, { window: { from: -7, to: 3 } }));
     for (const { left, right } of grid) expect([left, right]).toEqual([0, 0]);
     for (const { min, max } of xAxis) expect([min, max]).toEqual([-7, 3]);
-    expect(grid[1].top).toBe(grid[0].height + 1);
+    // Under the line between the panels stands what the lower one is, and no residual.
+    expect(grid[1].top).toBe(grid[0].height + 1 + 24);
+    expect(grid[1].top + grid[1].height).toBe(300 + 1 + 120);
   });
 
   it('by concentration shows the ligand’s axis above the residuals’ energies', () => {

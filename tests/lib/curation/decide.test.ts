@@ -1,29 +1,27 @@
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { readDatabase } from '@/db/client';
 import { selectDecisions } from '@/db/queries/decisions';
 import { selectRevisions } from '@/db/queries/revisions';
-import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
 import { type Actor, VISITOR } from '@/lib/auth/actor';
 import { acceptDeposit } from '@/lib/curation/accept-deposit';
 import { askForChanges } from '@/lib/curation/ask-for-changes';
+import { declineDeposit } from '@/lib/curation/decline-deposit';
 import { listQueue } from '@/lib/curation/list-queue';
+import { loadDeposit } from '@/lib/deposits/load-deposit';
 import { recallDeposit } from '@/lib/deposits/recall-deposit';
 import type { DepositState } from '@/lib/deposits/states';
 import { submitDeposit } from '@/lib/deposits/submit-deposit';
-import { auditOf, codeOf, makeCollection, makeDeposit, stored, worked } from '@/tests/support/collection';
-import { temporaryDatabase } from '@/tests/support/temporary-database';
+import { auditOf, codeOf, makeDeposit, stored, worked } from '@/tests/support/collection';
+import { collectionForTests } from '@/tests/support/collection-test';
 
-temporaryDatabase();
-let cast: Awaited<ReturnType<typeof makeCollection>>;
-beforeAll(async () => {
-  cast = await makeCollection();
-});
-afterAll(closeAssessmentPool);
+const { cast } = collectionForTests();
 
 const VERBS = {
   'accepting a deposit': (actor: Actor, id: string) => acceptDeposit({ actor, id }),
   'asking for changes': (actor: Actor, id: string) =>
     askForChanges({ actor, id, letter: 'State the temperature.' }),
+  'declining a deposit': (actor: Actor, id: string) =>
+    declineDeposit({ actor, id, letter: 'No point of it has an energy.' }),
 };
 const decisionsOf = async (id: string) => selectDecisions(await readDatabase(), id);
 
@@ -52,7 +50,7 @@ describe.each(Object.entries(VERBS))('%s', { timeout: 60_000 }, (_, decide) => {
     expect((await auditOf(id)).at(-1)).toBe('refused: decide-deposit');
   });
 
-  it.each(['changes-requested', 'published', 'declined', 'withdrawn'] as DepositState[])(
+  it.each(['changes-requested', 'accepted', 'published', 'declined', 'withdrawn'] as DepositState[])(
     'refuses the wrong state: %s',
     async (state) => {
       const id = await makeDeposit(cast, state);
@@ -82,22 +80,41 @@ describe('a decision', { timeout: 60_000 }, () => {
     const next = worked(
       await acceptDeposit({ actor: cast.curator, id: await makeDeposit(cast, 'submitted') }),
     );
-    expect(next.accession).toBe(accession + 1);
+    expect(next.accession).toBe((accession ?? Number.NaN) + 1);
   });
 
-  it('to ask for changes needs a letter of at most 20,000 characters', async () => {
+  it('to decline is final, and tells the laboratory why', async () => {
     const id = await makeDeposit(cast, 'submitted');
-    for (const letter of ['', ' \n ', 'x'.repeat(20_001)]) {
-      const outcome = await askForChanges({ actor: cast.curator, id, letter });
-      expect(codeOf(outcome)).toBe('invalid-input');
-      expect(outcome.ok || outcome.failure.members?.errors?.[0]?.pointer).toBe('/letter');
-    }
-    expect(codeOf(await acceptDeposit({ actor: cast.curator, id, letter: 'x'.repeat(20_001) }))).toBe(
-      'invalid-input',
-    );
-    worked(await askForChanges({ actor: cast.curator, id, letter: 'x'.repeat(20_000) }));
-    expect(await stored(id)).toMatchObject({ state: 'changes-requested' });
+    const letter = 'Averages over variants have no energy.';
+    expect(worked(await declineDeposit({ actor: cast.curator, id, letter })).deposit).toMatchObject({
+      state: 'declined',
+      accession: null,
+    });
+    expect(worked(await loadDeposit({ actor: cast.depositor, id })).decisions).toMatchObject([
+      { kind: 'declined', letter, revision: 1 },
+    ]);
+    expect((await auditOf(id)).at(-1)).toBe('declined: revision 1');
+    expect(codeOf(await submitDeposit({ actor: cast.depositor, id }))).toBe('conflict');
+    expect(codeOf(await recallDeposit({ actor: cast.depositor, id }))).toBe('conflict');
+    expect(codeOf(await acceptDeposit({ actor: cast.curator, id }))).toBe('conflict');
   });
+
+  it.each([askForChanges, declineDeposit])(
+    'that is an answer needs a letter of at most 20,000 characters (%o)',
+    async (answer) => {
+      const id = await makeDeposit(cast, 'submitted');
+      for (const letter of ['', ' \n ', 'x'.repeat(20_001)]) {
+        const outcome = await answer({ actor: cast.curator, id, letter });
+        expect(codeOf(outcome)).toBe('invalid-input');
+        expect(outcome.ok || outcome.failure.members?.errors?.[0]?.pointer).toBe('/letter');
+      }
+      expect(codeOf(await acceptDeposit({ actor: cast.curator, id, letter: 'x'.repeat(20_001) }))).toBe(
+        'invalid-input',
+      );
+      worked(await answer({ actor: cast.curator, id, letter: 'x'.repeat(20_000) }));
+      expect(['changes-requested', 'declined']).toContain((await stored(id))?.state);
+    },
+  );
 
   it('about a revision that is not the newest any more is refused', async () => {
     const id = await makeDeposit(cast, 'submitted');
@@ -111,14 +128,21 @@ describe('a decision', { timeout: 60_000 }, () => {
     const id = await makeDeposit(cast, 'submitted');
     const outcomes = await Promise.all(
       Array.from({ length: 50 }, (_, i) =>
-        i % 2 === 0
-          ? acceptDeposit({ actor: cast.curator, id })
-          : askForChanges({ actor: cast.curator, id, letter: `number ${i}` }),
+        [acceptDeposit, askForChanges, declineDeposit][i % 3]?.({
+          actor: cast.curator,
+          id,
+          letter: `number ${i}`,
+        }),
       ),
     );
-    expect(outcomes.filter(({ ok }) => ok)).toHaveLength(1);
-    expect(outcomes.filter((outcome) => !outcome.ok && outcome.failure.code === 'conflict')).toHaveLength(49);
-    expect(await decisionsOf(id)).toHaveLength(1);
+    expect(outcomes.filter((outcome) => outcome?.ok)).toHaveLength(1);
+    expect(
+      outcomes.filter((outcome) => outcome?.ok === false && outcome.failure.code === 'conflict'),
+    ).toHaveLength(49);
+    const [decision, ...others] = await decisionsOf(id);
+    expect(others).toEqual([]);
+    const state = decision?.kind === 'accepted' ? 'published' : decision?.kind;
+    expect(await stored(id)).toMatchObject({ state });
   });
 
   it('has one effect under one key', async () => {
@@ -134,7 +158,9 @@ describe('a decision', { timeout: 60_000 }, () => {
     const ids: string[] = [];
     for (let i = 0; i < 8; i++) ids.push(await makeDeposit(cast, 'submitted'));
     const outcomes = await Promise.all(ids.map((id) => acceptDeposit({ actor: cast.curator, id })));
-    const accessions = outcomes.map((outcome) => worked(outcome).accession).toSorted((a, b) => a - b);
+    const accessions = outcomes
+      .map((outcome) => worked(outcome).accession ?? Number.NaN)
+      .toSorted((a, b) => a - b);
     expect(accessions).toEqual(accessions.map((_, i) => (accessions[0] ?? 0) + i));
   });
 });

@@ -1,25 +1,19 @@
 import { eq } from 'drizzle-orm';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { readDatabase, write } from '@/db/client';
 import { selectNewestRevision } from '@/db/queries/revisions';
 import { datasetSeries, datasets, densityCells, offCurvePoints } from '@/db/tables/datasets';
-import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
 import { acceptDeposit } from '@/lib/curation/accept-deposit';
 import { encodeDataset } from '@/lib/datasets/encode-dataset';
 import { publishDataset } from '@/lib/datasets/publish-dataset';
 import { parseDocument } from '@/lib/documents/parse-document';
 import { assess } from '@/lib/engine/assess';
 import type { Assessment } from '@/lib/engine/assessment';
-import { makeCollection, makeDeposit, worked } from '@/tests/support/collection';
+import { makeDeposit, worked } from '@/tests/support/collection';
+import { collectionForTests } from '@/tests/support/collection-test';
 import { exampleDocument } from '@/tests/support/example-document';
-import { temporaryDatabase } from '@/tests/support/temporary-database';
 
-temporaryDatabase();
-let cast: Awaited<ReturnType<typeof makeCollection>>;
-beforeAll(async () => {
-  cast = await makeCollection();
-});
-afterAll(closeAssessmentPool);
+const { cast } = collectionForTests();
 
 /** Reads a column as any reader outside would: eight bytes a number, the lowest first. */
 function decoded(column: Buffer): number[] {
@@ -33,7 +27,11 @@ async function published(
   const id = await makeDeposit(cast, 'submitted', document);
   const { accession } = worked(await acceptDeposit({ actor: cast.curator, id }));
   const revision = await selectNewestRevision(await readDatabase(), id);
-  return { accession, id, assessment: JSON.parse(revision?.assessment ?? '') as Assessment };
+  return {
+    accession: accession ?? Number.NaN,
+    id,
+    assessment: JSON.parse(revision?.assessment ?? '') as Assessment,
+  };
 }
 
 const rowsOf = async (accession: number) => {
@@ -165,6 +163,39 @@ describe('a published dataset', { timeout: 60_000 }, () => {
     expect(dataset?.points).toBe(20_000);
     // Half a second alone on the machine; the rest is for a loaded one.
     expect(elapsed).toBeLessThan(5_000);
+  });
+
+  it('of 20,000 points off the curve does not hold up the loop', async () => {
+    const offCurve = Array.from({ length: 20_000 }, (_, point) => ({
+      ...{ position: 0, point, energy: Math.sin(point) * 9, activity: Math.cos(point) },
+      ...{ expected: 1 / (point + 1), z: -Math.exp(point / 2_000) * 1.1 },
+    }));
+    const parsed = parseDocument(JSON.stringify(exampleDocument()));
+    if (!parsed.ok) throw new Error('not valid');
+    const encoded = { ...encodeDataset(parsed.document, assess(parsed.document)), offCurve };
+    const depositId = await makeDeposit(cast);
+    const one = {
+      accession: 900_001,
+      depositId,
+      labId: cast.lab.labId,
+      revision: 1,
+      publishedAt: 1,
+      encoded,
+    };
+    let turns = 0;
+    const ticking = setInterval(() => {
+      turns += 1;
+    }, 1);
+    const statements = await write('acknowledged', async (tx) => {
+      turns = 0;
+      await publishDataset(tx, one);
+      return turns;
+    });
+    clearInterval(ticking);
+    expect(statements).toBeGreaterThan(2);
+    const { offCurve: kept } = await rowsOf(900_001);
+    const plain = kept.sort((a, b) => a.point - b.point).map(({ accession: _, ...row }) => row);
+    expect(plain).toEqual(offCurve);
   });
 
   it('gives way to its next revision and keeps the date of its first publication', async () => {

@@ -239,6 +239,20 @@ describe('one dataset', () => {
   });
 });
 
+describe('a choice that fits nothing any more', () => {
+  it('keeps its name', async () => {
+    const { facets } = await list('lab=quillan-institute&system=farx-adenol-cessate&ligand=velline');
+    const of = (choices: typeof facets.lab, slug: string) => choices.find(({ value }) => value === slug);
+    expect(of(facets.lab, 'quillan-institute')).toEqual({
+      ...{ value: 'quillan-institute', name: 'Quillan Institute', datasets: 0 },
+    });
+    expect(of(facets.system, 'farx-adenol-cessate')).toMatchObject({
+      ...{ name: 'FarX · adenol, cessate', datasets: 0 },
+    });
+    expect(of((await list('lab=nobody')).facets.lab, 'nobody')).toBeUndefined();
+  });
+});
+
 describe('systems and laboratories', () => {
   it('say what is published on or by them', async () => {
     const { list: all } = worked(await listSystems(VISITOR, { limit: 50, cursor: null }));

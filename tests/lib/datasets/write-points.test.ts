@@ -12,7 +12,8 @@ function loaded(change: (document: DatasetDocument) => void = () => undefined): 
   const points = assess(document).series.flatMap(({ id, points }) =>
     points.map((point) => ({ series: id, ligands: {}, modulators: {}, ...point })),
   );
-  const answer = { accession: 'CK-000001.1', revision: 1, note: null, points };
+  const units = { energy: 'kT' as const, ligands: { velline: 'uM' }, modulators: {} };
+  const answer = { accession: 'CK-000001.1', revision: 1, note: null, units, points };
   return { answer, document, accession: 'CK-000001.1' };
 }
 
@@ -29,7 +30,8 @@ describe('computed points as a file', () => {
     expect(rows).toHaveLength(10);
     given.answer.points.forEach((point, i) => {
       expect(rows[i].series).toBe(point.series);
-      expect(Number(rows[i].point)).toBe(point.index);
+      expect(Number(rows[i].point)).toBe((i % 5) + 1);
+      expect(Number(rows[i].index)).toBe(i % 5);
       expect(Number(rows[i].energy_kT)).toBe(point.energy);
       expect(Number(rows[i].residual)).toBe(point.residual);
       expect(Number(rows[i].p)).toBe(point.pValue);
@@ -38,23 +40,23 @@ describe('computed points as a file', () => {
     });
   });
 
-  it.each(['=1+1', '+1', '-1', '@SUM(A1)', '\tx', '\r=1'])(
-    'CSV: the text %j runs in no spreadsheet, and numbers stay numbers',
-    (text) => {
-      const csv = writePoints(
-        loaded((document) => {
-          document.series[0].label = text;
-          document.series[0].variant = `${text}, "quoted"`;
-        }),
-        'csv',
-      );
-      const [first] = readCsv(csv);
-      expect(first.label).toBe(`'${text}`);
-      expect(first.variant).toBe(`'${text}, "quoted"`);
-      const negative = readCsv(csv).filter(({ residual }) => residual.startsWith('-'));
-      expect(negative.length).toBeGreaterThan(0);
-    },
-  );
+  it.each([
+    ...['=1+1', '+1', '-1', '@SUM(A1)', '\tx', '\r=1', '\n=1+1', '\nx', '  =1+1', '＝1+1'],
+    '=HYPERLINK("x","y")\nz',
+  ])('CSV: the text %j runs in no spreadsheet, and numbers stay numbers', (text) => {
+    const csv = writePoints(
+      loaded((document) => {
+        document.series[0].label = text;
+        document.series[0].variant = `${text}, "quoted"`;
+      }),
+      'csv',
+    );
+    const [first] = readCsv(csv);
+    expect(first.label).toBe(`'${text}`);
+    expect(first.variant).toBe(`'${text}, "quoted"`);
+    const negative = readCsv(csv).filter(({ residual }) => residual.startsWith('-'));
+    expect(negative.length).toBeGreaterThan(0);
+  });
 
   it('NDJSON has one point a line, JSON the same points', () => {
     const given = loaded();

@@ -1,5 +1,4 @@
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
+import { describe, expect, it } from 'vitest';
 import { VISITOR } from '@/lib/auth/actor';
 import { createDeposit } from '@/lib/deposits/create-deposit';
 import { listDeposits } from '@/lib/deposits/list-deposits';
@@ -7,22 +6,16 @@ import {
   auditOf,
   bodyOf,
   codeOf,
-  makeCollection,
   makeLab,
   makePerson,
   stored,
   tokenOf,
   worked,
 } from '@/tests/support/collection';
+import { collectionForTests } from '@/tests/support/collection-test';
 import { exampleDocument } from '@/tests/support/example-document';
-import { temporaryDatabase } from '@/tests/support/temporary-database';
 
-temporaryDatabase();
-let cast: Awaited<ReturnType<typeof makeCollection>>;
-beforeAll(async () => {
-  cast = await makeCollection();
-});
-afterAll(closeAssessmentPool);
+const { cast } = collectionForTests();
 
 const valid = bodyOf(exampleDocument());
 

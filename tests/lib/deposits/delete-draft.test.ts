@@ -1,18 +1,15 @@
 import { Readable } from 'node:stream';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
+import { describe, expect, it } from 'vitest';
 import { type Actor, VISITOR } from '@/lib/auth/actor';
 import { attachFile } from '@/lib/deposits/attach-file';
 import { deleteDraft } from '@/lib/deposits/delete-draft';
 import { listDeposits } from '@/lib/deposits/list-deposits';
 import { recallDeposit } from '@/lib/deposits/recall-deposit';
 import type { DepositState } from '@/lib/deposits/states';
-import { startLocalStorage, stopLocalStorage } from '@/storage/local-server';
 import { getObject } from '@/storage/objects';
 import {
   auditOf,
   codeOf,
-  makeCollection,
   makeDeposit,
   makeLab,
   makePerson,
@@ -20,18 +17,9 @@ import {
   tokenOf,
   worked,
 } from '@/tests/support/collection';
-import { temporaryDatabase } from '@/tests/support/temporary-database';
+import { collectionForTests } from '@/tests/support/collection-test';
 
-temporaryDatabase();
-let cast: Awaited<ReturnType<typeof makeCollection>>;
-beforeAll(async () => {
-  await startLocalStorage();
-  cast = await makeCollection();
-});
-afterAll(async () => {
-  await closeAssessmentPool();
-  await stopLocalStorage();
-});
+const { cast } = collectionForTests({ storage: true });
 
 const remove = (actor: Actor, id: string, expected: readonly number[] | 'any' | null = 'any') =>
   deleteDraft({ actor, id, expected });

@@ -3,8 +3,7 @@ import { readdir } from 'node:fs/promises';
 import path from 'node:path';
 import { Readable } from 'node:stream';
 import { buffer } from 'node:stream/consumers';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
+import { describe, expect, it } from 'vitest';
 import { type Actor, VISITOR } from '@/lib/auth/actor';
 import { attachFile } from '@/lib/deposits/attach-file';
 import { detectMediaType } from '@/lib/deposits/detect-media-type';
@@ -12,20 +11,10 @@ import { listFiles, openFile } from '@/lib/deposits/open-file';
 import { removeFile } from '@/lib/deposits/remove-file';
 import type { DepositState } from '@/lib/deposits/states';
 import { submitDeposit } from '@/lib/deposits/submit-deposit';
-import { startLocalStorage, stopLocalStorage } from '@/storage/local-server';
-import { codeOf, forceState, makeCollection, makeDeposit, tokenOf, worked } from '@/tests/support/collection';
-import { temporaryDatabase } from '@/tests/support/temporary-database';
+import { codeOf, forceState, makeDeposit, tokenOf, worked } from '@/tests/support/collection';
+import { collectionForTests } from '@/tests/support/collection-test';
 
-const { dataDir } = temporaryDatabase();
-let cast: Awaited<ReturnType<typeof makeCollection>>;
-beforeAll(async () => {
-  await startLocalStorage();
-  cast = await makeCollection();
-});
-afterAll(async () => {
-  await closeAssessmentPool();
-  await stopLocalStorage();
-});
+const { cast, dataDir } = collectionForTests({ storage: true });
 
 const sha256 = (bytes: Buffer) => createHash('sha256').update(bytes).digest('hex');
 
@@ -85,6 +74,22 @@ describe('attaching a file', { timeout: 60_000 }, () => {
     const other = await attach(cast.token, id, Buffer.from('other'), { idempotencyKey: 'file-once' });
     expect(codeOf(other)).toBe('idempotency-mismatch');
     expect(await objectCount()).toBe(before + 1);
+  });
+
+  it('answers a repeated call as the first, also after the submission', async () => {
+    const id = await makeDeposit(cast);
+    const send = (text: string, more = {}) =>
+      attach(cast.token, id, Buffer.from(text), { idempotencyKey: 'before submission', ...more });
+    const first = worked(await send('the same'));
+    worked(await submitDeposit({ actor: cast.depositor, id }));
+    const before = await objectCount();
+    expect(worked(await send('the same'))).toEqual(first);
+    expect(codeOf(await send('another'))).toBe('idempotency-mismatch');
+    expect(codeOf(await send('the same', { sha256: sha256(Buffer.from('another')) }))).toBe(
+      'digest-mismatch',
+    );
+    expect(codeOf(await send('the same', { idempotencyKey: 'a new one' }))).toBe('conflict');
+    expect(await objectCount()).toBe(before);
   });
 
   it('refuses the wrong role', async () => {

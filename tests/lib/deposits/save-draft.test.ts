@@ -1,28 +1,24 @@
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
+import { describe, expect, it } from 'vitest';
 import { type Actor, VISITOR } from '@/lib/auth/actor';
 import { loadDeposit } from '@/lib/deposits/load-deposit';
 import { saveDraft } from '@/lib/deposits/save-draft';
 import type { DepositState } from '@/lib/deposits/states';
+import { headAnswer } from '@/lib/deposits/write-answer';
+import { createToken } from '@/lib/labs/create-token';
 import {
   auditOf,
   bodyOf,
   codeOf,
-  makeCollection,
   makeDeposit,
+  makePerson,
   stored,
   tokenOf,
   worked,
 } from '@/tests/support/collection';
+import { collectionForTests } from '@/tests/support/collection-test';
 import { exampleDocument } from '@/tests/support/example-document';
-import { temporaryDatabase } from '@/tests/support/temporary-database';
 
-temporaryDatabase();
-let cast: Awaited<ReturnType<typeof makeCollection>>;
-beforeAll(async () => {
-  cast = await makeCollection();
-});
-afterAll(closeAssessmentPool);
+const { cast } = collectionForTests();
 
 const save = (actor: Actor, id: string, value: unknown, expected: readonly number[] | 'any' | null = 'any') =>
   saveDraft({ actor, id, expected, readBody: bodyOf(value) });
@@ -43,8 +39,28 @@ describe('saving a draft', { timeout: 60_000 }, () => {
     const id = await makeDeposit(cast);
     expect(codeOf(await save(cast.depositor, id, {}, null))).toBe('precondition-required');
     worked(await save(cast.depositor, id, { title: 'kept' }, [1]));
-    expect(codeOf(await save(cast.depositor, id, { title: 'late' }, [1]))).toBe('stale');
+    const late = await save(cast.token, id, { title: 'late' }, [1]);
+    expect(codeOf(late)).toBe('stale');
+    // It says who was quicker, and when.
+    expect(late.ok || late.failure.detail).toMatch(
+      new RegExp(`^Version 2 was saved by ${cast.depositor.name} on \\d{4}-\\d\\d-\\d\\d \\d\\d:\\d\\d UTC;`),
+    );
     expect(await stored(id)).toMatchObject({ version: 2, title: 'kept' });
+  });
+
+  it('names its own people and tokens as those who saved it, and no curator', async () => {
+    const savedBy = async (id: string) =>
+      headAnswer(worked(await loadDeposit({ actor: cast.depositor, id })).deposit).updatedBy;
+    const id = await makeDeposit(cast);
+    expect(await savedBy(id)).toBe(cast.depositor.name);
+    const manager = await makePerson('depositor', { ...cast.lab, role: 'manager' });
+    const input = { name: 'plate reader', scopes: ['write-drafts'], days: 1 };
+    const token = worked(await createToken(manager, cast.lab.labId, input));
+    worked(await save({ ...tokenOf(cast.lab, 'write-drafts'), id: token.id }, id, {}));
+    expect(await savedBy(id)).toBe('the token “plate reader”');
+    expect(await savedBy(await makeDeposit(cast, 'changes-requested'))).toBeNull();
+    const own = await makeDeposit({ ...cast, depositor: cast.ownCurator });
+    expect(await savedBy(own)).toBe(cast.ownCurator.name);
   });
 
   it('refuses the wrong role: a curator learns nothing of a draft, a reading token may not write', async () => {
@@ -57,7 +73,7 @@ describe('saving a draft', { timeout: 60_000 }, () => {
     const submitted = await makeDeposit(cast, 'submitted');
     expect(codeOf(await save(cast.curator, submitted, {}))).toBe('forbidden');
     expect(await stored(id)).toMatchObject({ version: 1 });
-    expect(await auditOf(id)).toEqual(['created: draft', ...Array(3).fill('refused: edit-deposit')]);
+    expect(await auditOf(id)).toEqual(['created: draft', ...Array(4).fill('refused: edit-deposit')]);
   });
 
   it('refuses the wrong laboratory, to which there is no such draft', async () => {

@@ -1,8 +1,7 @@
 import { createHash } from 'node:crypto';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { readDatabase } from '@/db/client';
 import { selectNewestRevision, selectRevisions } from '@/db/queries/revisions';
-import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
 import { type Actor, VISITOR } from '@/lib/auth/actor';
 import { deleteDraft } from '@/lib/deposits/delete-draft';
 import { loadAssessment } from '@/lib/deposits/load-assessment';
@@ -13,25 +12,11 @@ import type { DepositState } from '@/lib/deposits/states';
 import { submitDeposit } from '@/lib/deposits/submit-deposit';
 import { parseDocument } from '@/lib/documents/parse-document';
 import { assess } from '@/lib/engine/assess';
-import {
-  auditOf,
-  bodyOf,
-  codeOf,
-  makeCollection,
-  makeDeposit,
-  stored,
-  tokenOf,
-  worked,
-} from '@/tests/support/collection';
+import { auditOf, bodyOf, codeOf, makeDeposit, stored, tokenOf, worked } from '@/tests/support/collection';
+import { collectionForTests } from '@/tests/support/collection-test';
 import { exampleDocument } from '@/tests/support/example-document';
-import { temporaryDatabase } from '@/tests/support/temporary-database';
 
-temporaryDatabase();
-let cast: Awaited<ReturnType<typeof makeCollection>>;
-beforeAll(async () => {
-  cast = await makeCollection();
-});
-afterAll(closeAssessmentPool);
+const { cast } = collectionForTests();
 
 const submit = (actor: Actor, id: string) => submitDeposit({ actor, id });
 const revisionsOf = async (id: string) => selectRevisions(await readDatabase(), id);

@@ -44,7 +44,7 @@ async function personIn(
   labId?: string,
   labRole: 'member' | 'manager' = 'member',
 ): Promise<Person> {
-  const email = `${name}@demo.example`;
+  const email = `${name}@test.example`;
   const id = await ensurePerson({ email, name, role, password: 'eight or more' });
   if (labId === undefined) return { kind: 'person', id, name, email, role, memberships: [] };
   await ensureMembership(id, labId, labRole);

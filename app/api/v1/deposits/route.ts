@@ -1,13 +1,14 @@
 /** `POST /api/v1/deposits`: a new draft. `GET`: the deposits of the caller's laboratories. */
+import { nextAddress } from '@/lib/datasets/list-cursor';
 import { createDeposit } from '@/lib/deposits/create-deposit';
 import { listDeposits } from '@/lib/deposits/list-deposits';
 import { depositPath, headAnswer } from '@/lib/deposits/write-answer';
 import { answeringActor, failureResponse } from '@/lib/serving/answer-actor';
-import { methodNotAllowed, optionsOf } from '@/lib/serving/answer-api';
+import { methodNotAllowed, optionsOf, privateResponse } from '@/lib/serving/answer-api';
 import { readIdempotencyKey } from '@/lib/serving/idempotency';
 import { etagOf } from '@/lib/serving/if-match';
 import { readJsonBody } from '@/lib/serving/read-body';
-import { depositQuerySchema } from '@/schemas/deposit';
+import { readDepositQuery } from '@/schemas/deposit';
 
 export const POST = answeringActor(async ({ request, actor }) => {
   const idempotency = readIdempotencyKey(request.headers);
@@ -30,24 +31,19 @@ export const POST = answeringActor(async ({ request, actor }) => {
 });
 
 export const GET = answeringActor(async ({ request, actor }) => {
-  const query = depositQuerySchema.safeParse(Object.fromEntries(new URL(request.url).searchParams));
-  if (!query.success) {
-    const [issue] = query.error.issues;
-    const detail = `${issue?.path.join('.')} is not right: ${issue?.message}.`;
-    return failureResponse({ code: 'bad-parameter', detail });
-  }
-  const listed = await listDeposits({ actor, ...query.data });
+  const read = readDepositQuery(new URL(request.url).searchParams);
+  if (!read.ok) return failureResponse({ code: 'bad-parameter', detail: read.detail });
+  const listed = await listDeposits({ actor, ...read.query });
   if (!listed.ok) return failureResponse(listed.failure);
-  const { deposits, next } = listed;
-  const headers: Record<string, string> = { 'Cache-Control': 'no-store' };
-  if (next !== null) headers.Link = `<${nextPage(request.url, next)}>; rel="next"`;
-  return Response.json({ deposits: deposits.map(headAnswer), next }, { headers });
+  const deposits = listed.deposits.map(headAnswer);
+  const next = listed.next === null ? null : nextPage(request.url, listed.next);
+  const link: Record<string, string> = next === null ? {} : { Link: `<${next}>; rel="next"` };
+  return privateResponse(request, JSON.stringify({ deposits, next }), undefined, link);
 });
 
 function nextPage(address: string, cursor: string): string {
   const { pathname, searchParams } = new URL(address);
-  searchParams.set('cursor', cursor);
-  return `${pathname}?${searchParams}`;
+  return nextAddress(pathname, searchParams, cursor);
 }
 
 const METHODS = ['GET', 'HEAD', 'POST'];

@@ -2,7 +2,7 @@
 import { deleteDraft } from '@/lib/deposits/delete-draft';
 import { loadDeposit } from '@/lib/deposits/load-deposit';
 import { saveDraft } from '@/lib/deposits/save-draft';
-import { depositJson, headAnswer } from '@/lib/deposits/write-answer';
+import { depositEtag, depositJson, headAnswer } from '@/lib/deposits/write-answer';
 import { answeringActor, failureResponse } from '@/lib/serving/answer-actor';
 import { methodNotAllowed, optionsOf, privateResponse, type RouteContext } from '@/lib/serving/answer-api';
 import { etagOf, readIfMatch } from '@/lib/serving/if-match';
@@ -14,7 +14,7 @@ export const GET = answeringActor(async ({ request, actor }, { params }: Context
   const { id } = await params;
   const loaded = await loadDeposit({ actor, id });
   if (!loaded.ok) return failureResponse(loaded.failure);
-  return privateResponse(request, depositJson(loaded), etagOf(loaded.deposit.version));
+  return privateResponse(request, depositJson(loaded), depositEtag(loaded));
 });
 
 export const PUT = answeringActor(async ({ request, actor }, { params }: Context) => {

@@ -7,7 +7,7 @@ import { fileAnswer } from '@/lib/deposits/write-answer';
 import type { Outcome } from '@/lib/errors';
 import { failed } from '@/lib/errors';
 import { answeringActor, failureResponse } from '@/lib/serving/answer-actor';
-import { methodNotAllowed, optionsOf, type RouteContext } from '@/lib/serving/answer-api';
+import { methodNotAllowed, optionsOf, privateResponse, type RouteContext } from '@/lib/serving/answer-api';
 import { MOST_FILE_BYTES } from '@/lib/serving/body-bounds';
 import { declaredSha256 } from '@/lib/serving/declared-digest';
 import { cleanFileName, statedFileName } from '@/lib/serving/file-names';
@@ -28,11 +28,10 @@ export const POST = answeringActor(async ({ request, actor }, { params }: Contex
   return Response.json(answer, { status: 201, headers });
 });
 
-export const GET = answeringActor(async ({ actor }, { params }: Context) => {
+export const GET = answeringActor(async ({ request, actor }, { params }: Context) => {
   const listed = await listFiles({ actor, id: (await params).id });
   if (!listed.ok) return failureResponse(listed.failure);
-  const headers = { 'Cache-Control': 'no-store' };
-  return Response.json({ files: listed.files.map(fileAnswer) }, { headers });
+  return privateResponse(request, JSON.stringify({ files: listed.files.map(fileAnswer) }));
 });
 
 interface Upload {
@@ -44,6 +43,7 @@ interface Upload {
 /** What address and headers say of a file, before a byte of it is read. */
 function describeUpload(request: Request): Outcome<Upload> {
   const { headers } = request;
+  if (/^\s*multipart\//i.test(headers.get('content-type') ?? '')) return failed('not-plain-file');
   const stated =
     new URL(request.url).searchParams.get('name') ?? statedFileName(headers.get('content-disposition'));
   const name = cleanFileName(stated ?? '');

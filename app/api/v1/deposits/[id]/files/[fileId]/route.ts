@@ -7,6 +7,7 @@ import { answeringActor, failureResponse } from '@/lib/serving/answer-actor';
 import { matches, methodNotAllowed, optionsOf, type RouteContext } from '@/lib/serving/answer-api';
 import { digestMember } from '@/lib/serving/declared-digest';
 import { attachmentHeader } from '@/lib/serving/file-names';
+import { answerWithLength } from '@/lib/serving/late-answer';
 
 type Context = RouteContext<'id' | 'fileId'>;
 
@@ -23,15 +24,19 @@ export const GET = answeringActor(async ({ request, actor }, { params }: Context
     ...caching,
     'Content-Type': file.mediaType,
     'Content-Disposition': attachmentHeader(file.name),
-    // Sandbox and nosniff come from the server (lib/serving/security-headers.ts); a length Next would not let through.
+    // Sandbox and nosniff come from the server (lib/serving/security-headers.ts).
     'Repr-Digest': digestMember(file.sha256),
   };
-  if (request.method === 'HEAD') return new Response(null, { headers });
+  if (request.method === 'HEAD') {
+    answerWithLength(file.size);
+    return new Response(null, { headers });
+  }
   const bytes = await open().catch((error: unknown) => {
     log().error({ err: error }, 'a file could not be opened');
     return null;
   });
   if (bytes === null) return failureResponse({ code: 'unavailable' });
+  answerWithLength(file.size);
   return new Response(Readable.toWeb(bytes) as ReadableStream, { headers });
 });
 

@@ -1,5 +1,5 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
-import { selectLine } from '@/components/check/select-line';
+import { selectLine } from '@/components/ui/select-line';
 
 /** What is used of a text area. */
 function areaOf(value: string) {

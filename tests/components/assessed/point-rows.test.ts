@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { pointRows } from '@/components/check/point-rows';
+import { pointRows } from '@/components/assessed/point-rows';
 import { plottedExample } from '../../support/plotted-dataset';
 
 const data = plottedExample('thousand-fold');

@@ -4,7 +4,7 @@ import { useState } from 'react';
 import { type EnergyWindow, orderedWindow, roundEdge } from '@/components/plots/energy-window';
 import { Button } from '@/components/ui/button';
 import { NumberField } from '@/components/ui/number-field';
-import { readNumber } from './read-number';
+import { readNumber } from '@/components/ui/read-number';
 
 interface WindowFieldsProps {
   window: EnergyWindow;
@@ -25,7 +25,7 @@ export function WindowFields({ window, full, onWindow }: WindowFieldsProps) {
   const isFull = window.from === full.from && window.to === full.to;
   return (
     <form
-      className="mt-1.5"
+      className="no-print mt-1.5"
       onSubmit={(event) => {
         event.preventDefault();
         if (wanted) onWindow(wanted);

@@ -51,7 +51,7 @@ export function Statements({ data, chosen, onChoose }: StatementsProps) {
 
 function Step({ label, sign, onClick }: { label: string; sign: string; onClick: () => void }) {
   return (
-    <Button aria-label={label} className="min-w-6 justify-center" onClick={onClick}>
+    <Button aria-label={label} className="no-print min-w-6 justify-center" onClick={onClick}>
       {sign}
     </Button>
   );
@@ -179,7 +179,16 @@ function Predictions({ data, series }: { data: PlotData; series: PlotSeries }) {
           ) : null}
           <dl>
             {rowsOf(quantities).map(([label, estimate, unit]) => (
-              <Row key={label} label={label} words={{ stated: estimateWords(estimate, unit) }} />
+              <Row
+                key={label}
+                label={label}
+                note={
+                  label === RANGE
+                    ? 'from no ligand to saturation; in between it may reach further'
+                    : undefined
+                }
+                words={{ stated: estimateWords(estimate, unit) }}
+              />
             ))}
           </dl>
         </Fragment>
@@ -188,12 +197,15 @@ function Predictions({ data, series }: { data: PlotData; series: PlotSeries }) {
   );
 }
 
+/** Of the two ends: where the energy turns back in between, the activity reaches beyond them. */
+const RANGE = 'Range, end to end';
+
 function rowsOf(derived: DerivedQuantities): [string, Estimate | null, string][] {
   const unit = unitLabel(derived.unit);
   return [
     ['Without ligand', derived.leakiness, ''],
     ['At saturation', derived.saturation, ''],
-    ['Range', derived.dynamicRange, ''],
+    [RANGE, derived.dynamicRange, ''],
     ['EC50', derived.ec50, unit],
     ['Half activity', derived.halfActivity, unit],
     ['Effective Hill', derived.effectiveHill, ''],

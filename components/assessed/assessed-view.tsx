@@ -6,7 +6,7 @@ import { RowFrame } from '@/components/layout/row-frame';
 import { ScrollingCell } from '@/components/layout/scrolling-cell';
 import { CollapsePanel } from '@/components/plots/collapse-panel';
 import { type EnergyWindow, fullWindow } from '@/components/plots/energy-window';
-import { energiesOf, type PlotData } from '@/components/plots/plot-data';
+import { energiesOf, type PlotData, type PointPlace } from '@/components/plots/plot-data';
 import { RowHeads } from '@/components/plots/row-figures';
 import { useSize } from '@/components/plots/use-size';
 import { WindowRuler } from '@/components/plots/window-ruler';
@@ -35,6 +35,8 @@ interface AssessedViewProps {
   pending?: ReactNode;
   /** whether the table begins with the flagged points */
   flaggedFirst?: boolean;
+  /** the point that the page was opened at */
+  marked?: PointPlace | null;
 }
 
 /** An assessed dataset in the three columns: statements, collapse on the axis, verdict; a strip a series below. */
@@ -46,10 +48,11 @@ export function AssessedView({
   aside,
   pending = null,
   flaggedFirst = false,
+  marked = null,
 }: AssessedViewProps) {
   const column = useRef<HTMLDivElement>(null);
   const { width } = useSize(column);
-  const [chosen, setChosen] = useState(0);
+  const [chosen, setChosen] = useState(marked?.series ?? 0);
   /** the series whose row is pointed at: its points are lit */
   const [lit, setLit] = useState<number | null>(null);
   /** the series of the point that is pointed at: its row is lit */
@@ -80,6 +83,7 @@ export function AssessedView({
                 byLigand={look.byLigand}
                 ligand={look.byLigand ?? lastLigand ?? data.document.ligands[0]?.id ?? null}
                 lit={lit}
+                marked={marked}
                 sentence={sentenceOn(data, look)}
                 onPoint={(place) => setPointed(place?.series ?? null)}
                 onChoose={(place) => setChosen(place.series)}
@@ -120,7 +124,15 @@ export function AssessedView({
         </ul>
       </AxisFrame>
       <div className="page-width">
-        {pending ? null : <PointTable data={data} window={look.window} flaggedFirst={flaggedFirst} />}
+        {pending ? null : (
+          <PointTable
+            data={data}
+            window={look.window}
+            onAll={() => setWindow(full)}
+            flaggedFirst={flaggedFirst}
+            marked={marked}
+          />
+        )}
       </div>
     </>
   );

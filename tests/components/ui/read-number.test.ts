@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest';
-import { readNumber } from '@/components/check/read-number';
+import { readNumber } from '@/components/ui/read-number';
 
 it.each([
   ['2.4', 2.4],

@@ -19,7 +19,7 @@ export function CollapseSwitch({ data, byLigand, onChange }: CollapseSwitchProps
       {options.map(({ id, label }) => (
         <label
           key={id ?? ''}
-          className="inline-flex min-h-9 items-center border-transparent border-b-2 text-sm text-soft hover:text-ink has-checked:border-ink has-checked:font-semibold has-checked:text-ink has-focus-visible:outline-2 has-focus-visible:outline-act"
+          className="inline-flex min-h-9 items-center border-transparent border-b-2 not-has-checked:print:hidden text-sm text-soft hover:text-ink has-checked:border-ink has-checked:font-semibold has-checked:text-ink has-focus-visible:outline-2 has-focus-visible:outline-act"
         >
           <input
             type="radio"

@@ -1,6 +1,6 @@
 import { expect, it } from 'vitest';
+import { sentenceOn } from '@/components/assessed/summary-sentence';
 import { EXAMPLE_WORDS, isExampleSlug, loadExample } from '@/components/check/example-words';
-import { sentenceOn } from '@/components/check/summary-sentence';
 import { parseDocument } from '@/lib/documents/parse-document';
 import { plottedExample } from '../../support/plotted-dataset';
 

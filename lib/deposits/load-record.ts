@@ -1,19 +1,18 @@
 /** A deposit as its pages are given it: what the API sends, with the document’s own text beside it. */
-import type { DepositRecord } from '@/components/deposits/deposit-editor';
 import type { Actor } from '@/lib/auth/actor';
-import { loadAssessment } from '@/lib/deposits/load-assessment';
-import { loadDeposit } from '@/lib/deposits/load-deposit';
-import { listFiles } from '@/lib/deposits/open-file';
-import { depositJson, fileAnswer } from '@/lib/deposits/write-answer';
 import type { Assessment } from '@/lib/engine/assessment';
 import type { Outcome } from '@/lib/errors';
 import type { DatasetDocument } from '@/schemas/dataset-1.generated';
 import type { DepositAnswer } from '@/schemas/deposit';
 import type { FileAnswer } from '@/schemas/file';
+import { loadAssessment } from './load-assessment';
+import { loadDeposit } from './load-deposit';
+import { listFiles } from './open-file';
+import { depositJson, fileAnswer } from './write-answer';
 
 export interface LoadedRecord {
   labId: string;
-  deposit: DepositRecord;
+  deposit: Omit<DepositAnswer, 'document'>;
   /** the document as it was sent */
   text: string;
   value: unknown;
