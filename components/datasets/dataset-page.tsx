@@ -8,7 +8,7 @@ import { DatasetRecord } from './dataset-record';
 import { PublishedHead } from './published-head';
 import { type DocumentHead, publishedPlotData } from './published-plot-data';
 import { ReadFailure } from './read-failure';
-import { useDatasetPoints } from './use-collection';
+import { useDatasetPoints, useWholeDocument } from './use-collection';
 import { useLook } from './use-look';
 
 /** What the page of a dataset shows, its points aside. */
@@ -24,6 +24,7 @@ interface DatasetPageProps {
 export function DatasetPage({ dataset, opening }: DatasetPageProps) {
   const { document, assessment, accession, revision } = dataset;
   const { data: answer, error, refetch } = useDatasetPoints(`${accession}.${revision}`, true);
+  const wholeDocument = useWholeDocument(`${accession}.${revision}`);
   const [look, setLook] = useLook(
     opening,
     document.ligands.map(({ id }) => id),
@@ -35,6 +36,7 @@ export function DatasetPage({ dataset, opening }: DatasetPageProps) {
         look={look}
         onLook={setLook}
         head={<PublishedHead dataset={dataset} />}
+        wholeDocument={wholeDocument}
         flaggedFirst={assessment.summary.warning + assessment.summary.offCurve > 0}
         pending={
           answer ? undefined : (

@@ -3,6 +3,7 @@
 import { useEffect, useRef, useState } from 'react';
 import { selectLine } from '@/components/check/select-line';
 import { AxisFrame } from '@/components/layout/axis-frame';
+import { TrialBand } from '@/components/reasons/trial-band';
 import { Button } from '@/components/ui/button';
 import type { SelectOption } from '@/components/ui/select-field';
 import type { SyntaxProblem } from '@/lib/documents/find-syntax-error';
@@ -14,6 +15,7 @@ import { DepositFiles } from './deposit-files';
 import { DocumentText } from './document-text';
 import { accessTo, isUnchanged } from './draft-access';
 import { DraftCollapse } from './draft-collapse';
+import { DraftReasons, useDraftReasons } from './draft-reasons';
 import { DraftStatus, DraftVerdict } from './draft-status';
 import { listOf, objectOf, readDraft, textOf } from './draft-value';
 import { EditorSections } from './editor-sections';
@@ -94,6 +96,7 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
 
   const access = accessTo(content.value, saved.content.value, saved.errors, draft.set);
   const isStale = assessed !== null && assessed.value !== content.value;
+  const reasons = useDraftReasons(assessed?.data ?? null, draft, isStale);
   const shownSeries = Math.min(series, Math.max(0, listOf(content.value.series).length - 1));
   const complaint = calls.complaint;
   const takeUp = (kept: string) => {
@@ -140,7 +143,15 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
           edit === null ? (
             <div className="flex h-full flex-col">
               {assessed ? (
-                <DraftCollapse data={assessed.data} series={shownSeries} onSeries={choose} />
+                <>
+                  <TrialBand stated={assessed.data} trials={reasons.trials} />
+                  <DraftCollapse
+                    data={reasons.trials.drawn?.data ?? assessed.data}
+                    opening={reasons.trials.drawn?.window}
+                    series={shownSeries}
+                    onSeries={choose}
+                  />
+                </>
               ) : (
                 <p className="border-hairline border-b px-2 py-3 text-soft max-lg:px-0">
                   {saved.errors.length > 0
@@ -220,7 +231,16 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
                 onGo={go}
               />
             ) : null}
-            {assessed ? <DraftVerdict summary={assessed.data.assessment.summary} isStale={isStale} /> : null}
+            {assessed ? (
+              <>
+                <DraftVerdict
+                  summary={(reasons.trials.trial ?? assessed).data.assessment.summary}
+                  isStale={isStale}
+                  isTrial={reasons.trials.trial !== null}
+                />
+                <DraftReasons data={assessed.data} reasons={reasons} />
+              </>
+            ) : null}
             <ProblemNotice error={error} />
             <DepositFiles id={id} initial={files} editable />
             <SubmitForm

@@ -53,8 +53,15 @@ export function StateHead({ state }: { state: DepositState }) {
   );
 }
 
+interface DraftVerdictProps {
+  summary: AssessmentSummary;
+  isStale: boolean;
+  /** the figures are those of a trial */
+  isTrial?: boolean;
+}
+
 /** What the assessment amounts to, in a few figures. */
-export function DraftVerdict({ summary, isStale }: { summary: AssessmentSummary; isStale: boolean }) {
+export function DraftVerdict({ summary, isStale, isTrial = false }: DraftVerdictProps) {
   return (
     <section aria-label="Verdict" className="mt-5 border-ink border-t pt-3">
       <p className="font-serif">
@@ -62,8 +69,8 @@ export function DraftVerdict({ summary, isStale }: { summary: AssessmentSummary;
         <span className="text-soft text-xl">/ {formatCount(summary.points)}</span>
       </p>
       <p className="text-sm text-soft">
-        points on the curve, RMS <MathSymbol>z</MathSymbol> {formatScore(summary.rmsZ)},{' '}
-        <MathSymbol>p</MathSymbol> {formatPValue(summary.pValue)}
+        points on the curve{isTrial ? ' in the trial' : ''}, RMS <MathSymbol>z</MathSymbol>{' '}
+        {formatScore(summary.rmsZ)}, <MathSymbol>p</MathSymbol> {formatPValue(summary.pValue)}
       </p>
       <FlagCounts counts={summary} />
       {isStale ? <p className="mt-2 text-sm text-soft">Of the draft as it was last saved.</p> : null}
