@@ -78,14 +78,7 @@ export interface QStatistic {
 }
 
 /** One-step alternatives to the stated parameters, and two pairs of them. */
-export type ShapeKind =
-  | 'offset'
-  | 'slope'
-  | 'ceiling'
-  | 'floor'
-  | 'stock'
-  | 'offset+slope'
-  | 'floor+ceiling';
+export type ShapeKind = 'offset' | 'slope' | 'ceiling' | 'floor' | 'stock' | 'offset+slope' | 'floor+ceiling';
 
 /** offset in kT; slope, ceiling (A), floor (B) and stock (α) are plain numbers. */
 export type ShapeEstimateName = 'offset' | 'slope' | 'ceiling' | 'floor' | 'stock';
