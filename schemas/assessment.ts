@@ -3,7 +3,7 @@
  * Energies in kT, concentrations in the ligand's own unit.
  */
 import { z } from 'zod';
-import { CONCENTRATION_UNITS } from '@/lib/engine/units';
+import { CONCENTRATION_UNITS, ENERGY_UNITS } from '@/lib/engine/units';
 
 const estimateSchema = z.strictObject({ value: z.number(), u: z.number() }).meta({
   id: 'Estimate',
@@ -18,7 +18,11 @@ const noteSchema = z
       'correlations-not-stated',
       'depletion',
       'derived-not-defined',
+      'linear-uncertainty',
       'no-degrees-of-freedom',
+      'normalisation',
+      'protein-concentration-not-stated',
+      'uncertainty-too-wide',
     ]),
     detail: z.string(),
     points: z.array(z.int()).optional(),
@@ -57,6 +61,65 @@ const derivedSchema = z
   })
   .meta({ id: 'DerivedQuantities' });
 
+const SHAPES = ['offset', 'slope', 'ceiling', 'floor', 'stock', 'offset+slope', 'floor+ceiling'] as const;
+
+const shapeSchema = z
+  .strictObject({
+    best: z.enum([...SHAPES, 'none']).meta({
+      description:
+        'The alternative that is named: lowest AIC, at least 8 below that of the stated parameters',
+    }),
+    allowedByStatements: z.number().meta({
+      description: 'The offset that the stated uncertainties alone would allow, kT',
+    }),
+    alternatives: z.array(
+      z.strictObject({
+        kind: z.enum(SHAPES),
+        estimates: z.array(
+          z.strictObject({
+            name: z.enum(['offset', 'slope', 'ceiling', 'floor', 'stock']),
+            value: z.number().meta({ description: 'Offset in kT, the others plain numbers' }),
+            u: z.number(),
+          }),
+        ),
+        deltaAIC: z.number().meta({
+          description: 'AIC less that of the stated parameters: negative favours the alternative',
+        }),
+      }),
+    ),
+  })
+  .meta({ id: 'Shape', description: 'One-step alternatives to the stated parameters, lowest AIC first' });
+
+const improvement = {
+  rmsZ: z.number(),
+  deltaSumZ2: z.number().meta({ description: 'Σz² with the misreading less Σz² as stated' }),
+};
+
+const conventionSchema = z
+  .discriminatedUnion('misreading', [
+    z.strictObject({ misreading: z.literal('gap-orientation'), ...improvement }),
+    z.strictObject({ misreading: z.literal('gap-scope'), ...improvement }),
+    z.strictObject({ misreading: z.literal('swapped-constants'), ...improvement }),
+    z.strictObject({ misreading: z.literal('inverted-activity'), ...improvement }),
+    z.strictObject({
+      misreading: z.literal('concentration-scale'),
+      factor: z.number().meta({ description: 'What the stated concentrations must be multiplied by' }),
+      ...improvement,
+    }),
+    z.strictObject({
+      misreading: z.literal('gap-unit'),
+      unit: z.enum(ENERGY_UNITS).meta({ description: 'What the number of the gap is in' }),
+      ...improvement,
+    }),
+    z.strictObject({ misreading: z.literal('association-constants'), ...improvement }),
+    z.strictObject({
+      misreading: z.literal('log-ratio'),
+      base: z.enum(['10', 'e']).meta({ description: 'The base of the logarithm that the ratio’s number is' }),
+      ...improvement,
+    }),
+  ])
+  .meta({ id: 'ConventionFinding', description: 'A misreading of the statements that explains the points' });
+
 const qStatistic = {
   chiSquared: z.number(),
   degreesOfFreedom: z.number(),
@@ -73,6 +136,8 @@ export const seriesAssessmentSchema = z
     gapKT: z.number(),
     sites: z.number(),
     derived: z.array(derivedSchema),
+    shape: shapeSchema,
+    conventions: z.array(conventionSchema),
     notes: z.array(noteSchema),
     points: z.array(assessedPointSchema),
   })
@@ -86,6 +151,7 @@ const summarySchema = z
     warning: z.int(),
     offCurve: z.int(),
     expectedByChance: z.strictObject({ warning: z.number(), offCurve: z.number() }),
+    conventions: z.array(conventionSchema),
   })
   .meta({ id: 'AssessmentSummary' });
 

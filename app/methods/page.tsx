@@ -3,13 +3,18 @@ import { notFound } from 'next/navigation';
 import { AxisFrame } from '@/components/layout/axis-frame';
 import { CollapseSection } from '@/components/methods/collapse-section';
 import { MethodsContents } from '@/components/methods/contents';
+import { ConventionsSection } from '@/components/methods/conventions-section';
 import { DerivedSection } from '@/components/methods/derived-section';
 import { FlagsSection } from '@/components/methods/flags-section';
 import { MeasuredSection } from '@/components/methods/measured-section';
 import { ModelSection } from '@/components/methods/model-section';
+import { MonteCarloSection } from '@/components/methods/monte-carlo-section';
+import { NormalisationSection } from '@/components/methods/normalisation-section';
 import { NotJudgedSection } from '@/components/methods/not-judged-section';
 import { QuickFacts } from '@/components/methods/quick-facts';
 import { RangesSection } from '@/components/methods/ranges-section';
+import { RefitMethodsSection } from '@/components/methods/refit-section';
+import { ShapeSection } from '@/components/methods/shape-section';
 import { SourcesSection } from '@/components/methods/sources-section';
 import { StatementsSection } from '@/components/methods/statements-section';
 import { SymbolsSection } from '@/components/methods/symbols-section';
@@ -48,6 +53,11 @@ export default function MethodsPage() {
           <FlagsSection />
           <CollapseSection />
           <DerivedSection />
+          <ShapeSection />
+          <ConventionsSection />
+          <NormalisationSection />
+          <RefitMethodsSection />
+          <MonteCarloSection />
           <NotJudgedSection />
           <SourcesSection />
         </div>

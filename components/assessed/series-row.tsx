@@ -13,10 +13,13 @@ export interface SeriesRowProps {
   chosen: boolean;
   onLight: (on: boolean) => void;
   onChoose: () => void;
+  /** why it misses, in a few words */
+  why?: string | null;
 }
 
 /** A series as a row on the page's columns: name, strip, figures. Pointing at it or focusing it lights its points. */
-export function SeriesRow({ series, window, width, lit, chosen, onLight, onChoose }: SeriesRowProps) {
+export function SeriesRow(props: SeriesRowProps) {
+  const { series, window, width, lit, chosen, onLight, onChoose, why } = props;
   const { assessed, stated } = series;
   const onCurve = assessed.points.filter(({ flag }) => flag === 'on-curve').length;
   return (
@@ -38,7 +41,10 @@ export function SeriesRow({ series, window, width, lit, chosen, onLight, onChoos
               <SeriesDot colour={series.colour} />
               <span className="truncate">{series.label}</span>
             </span>
-            <span className="block truncate text-sm text-soft">{subtitle(series)}</span>
+            <span className="block truncate text-sm text-soft">
+              {why ? <span className="text-off">{why} · </span> : null}
+              {subtitle(series)}
+            </span>
           </button>
         }
         axis={<SeriesStrip points={assessed.points} window={window} width={width} lit={lit} />}

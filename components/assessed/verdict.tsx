@@ -1,5 +1,7 @@
+import type { ReactNode } from 'react';
 import { type EnergyWindow, isInside } from '@/components/plots/energy-window';
 import { countFlags, type PlotData } from '@/components/plots/plot-data';
+import { whyItMisses } from '@/components/reasons/reason-sentence';
 import { formatCount, formatPValue, formatScore } from '@/components/ui/format-quantity';
 import { MathSymbol } from '@/components/ui/math-symbol';
 import type { Note } from '@/lib/engine/assessment';
@@ -11,10 +13,14 @@ interface VerdictProps {
   window: EnergyWindow;
   full: EnergyWindow;
   onWindow: (window: EnergyWindow) => void;
+  /** the figures are those of a trial */
+  isTrial?: boolean;
+  /** under the figures: why series miss */
+  children?: ReactNode;
 }
 
 /** What follows: points on the curve, whether chance explains the rest, the whole's Q, notes, the window. */
-export function Verdict({ data, window, full, onWindow }: VerdictProps) {
+export function Verdict({ data, window, full, onWindow, isTrial = false, children }: VerdictProps) {
   const { summary } = data.assessment;
   return (
     <>
@@ -22,7 +28,7 @@ export function Verdict({ data, window, full, onWindow }: VerdictProps) {
         <span className="font-semibold text-4xl">{formatCount(summary.onCurve)}</span>{' '}
         <span className="text-soft text-xl">/ {formatCount(summary.points)}</span>
       </p>
-      <p className="text-sm text-soft">points on the master curve</p>
+      <p className="text-sm text-soft">points on the master curve{isTrial ? ', in the trial' : ''}</p>
       <FlagCounts counts={summary} />
       <dl className="mt-4 border-hairline border-t pt-3">
         <Figure
@@ -45,7 +51,8 @@ export function Verdict({ data, window, full, onWindow }: VerdictProps) {
         />
       </dl>
       <p className="mt-1 text-sm text-soft">{sentenceOnQ(data)}</p>
-      <p className="mt-3 text-sm text-soft">
+      {children}
+      <p className="mt-3 text-sm text-soft [section+&]:border-hairline [section+&]:border-t [section+&]:pt-3">
         A point is off the curve beyond three standard uncertainties of the measurement and the stated
         parameters together. Chance alone would put about {chance(summary.expectedByChance.offCurve)} there,
         and {chance(summary.expectedByChance.warning)} among the warnings.
@@ -56,7 +63,7 @@ export function Verdict({ data, window, full, onWindow }: VerdictProps) {
   );
 }
 
-function Figure({ label, value, strong }: { label: React.ReactNode; value: string; strong: boolean }) {
+function Figure({ label, value, strong }: { label: ReactNode; value: string; strong: boolean }) {
   return (
     <div className="flex justify-between gap-3">
       <dt>{label}</dt>
@@ -102,8 +109,12 @@ function Notes({ data }: { data: PlotData }) {
 /** Each sentence once, with the series that it holds for. */
 function groupNotes(data: PlotData): { note: Note; series: string[] }[] {
   const groups = new Map<string, { note: Note; series: string[] }>();
-  for (const { assessed, label } of data.series) {
+  const reasoned = new Set(whyItMisses(data).series.map(({ index }) => index));
+  for (const [i, { assessed, label }] of data.series.entries()) {
     for (const note of assessed.notes) {
+      // Said with the derived quantities, or with the reasons why the series misses.
+      if (note.code === 'derived-not-defined') continue;
+      if (reasoned.has(i) && (note.code === 'normalisation' || note.code === 'circular')) continue;
       const group = groups.get(note.detail) ?? { note, series: [] };
       group.series.push(label);
       groups.set(note.detail, group);
@@ -112,7 +123,7 @@ function groupNotes(data: PlotData): { note: Note; series: string[] }[] {
   return [...groups.values()];
 }
 
-function WindowSection({ data, window, full, onWindow }: VerdictProps) {
+function WindowSection({ data, window, full, onWindow }: Omit<VerdictProps, 'isTrial' | 'children'>) {
   const points = data.series.flatMap(({ assessed }) => assessed.points);
   const inside = points.filter(({ energy }) => isInside(energy, window));
   const below = points.filter(({ energy }) => energy < window.from).length;

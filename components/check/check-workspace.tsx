@@ -6,6 +6,8 @@ import { AssessedView, type Look } from '@/components/assessed/assessed-view';
 import type { DepositingLab } from '@/components/deposits/lab-choice';
 import { openingWindow } from '@/components/plots/energy-window';
 import { type PlotData, pointsOf } from '@/components/plots/plot-data';
+import { StatedBand } from '@/components/reasons/stated-band';
+import type { StatedReading } from '@/components/reasons/why-it-misses';
 import { readCsvPoints } from '@/lib/documents/read-csv-points';
 import { assessSource, type SourceOutcome } from './assess-source';
 import { type CsvDraft, draftFor } from './csv-draft';
@@ -25,6 +27,12 @@ interface Job {
   example: ExampleSlug | null;
 }
 
+interface Restated {
+  reading: StatedReading;
+  becameDocument: boolean;
+  before: Job;
+}
+
 interface CheckWorkspaceProps {
   /** the laboratories that the reader may keep a draft for; none for a visitor */
   labs?: readonly DepositingLab[];
@@ -39,6 +47,8 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
   const [editing, setEditing] = useState(true);
   const [data, setData] = useState<PlotData | null>(null);
   const [look, setLook] = useState<Look | null>(null);
+  /** what was stated otherwise from a reason, and what stood before */
+  const [restated, setRestated] = useState<Restated | null>(null);
   const abort = useRef<AbortController | null>(null);
 
   const { mutate, isPending } = useMutation({
@@ -63,6 +73,7 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
     setSource(next);
     setExample(null);
     setOutcome(null);
+    setRestated(null);
     if (next.text.trim() !== '' && kindOf(next) === 'table')
       setDraft((earlier) => draftFor(readCsvPoints(next.text), earlier));
   };
@@ -79,6 +90,25 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
     setDraft(table.draft);
     setExample(null);
     setOutcome(null);
+    setRestated(null);
+  };
+  const check = (job: Job) => {
+    setSource(job.source);
+    setDraft(job.draft);
+    setExample(job.example);
+    mutate(job);
+  };
+  const state = async (reading: StatedReading) => {
+    if (data === null || isPending) return;
+    const { stateInSource } = await import('./state-source');
+    const { becameDocument, ...next } = stateInSource(source, draft, data.document, reading);
+    setRestated({ reading, becameDocument, before: { source, draft, example } });
+    check({ ...next, example: null });
+  };
+  const undo = () => {
+    if (restated === null) return;
+    setRestated(null);
+    check(restated.before);
   };
 
   const keep = (
@@ -122,6 +152,8 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
         data={data}
         look={look}
         onLook={setLook}
+        onState={(reading) => void state(reading)}
+        stated={restated === null ? null : <RestatedBand restated={restated} onUndo={undo} />}
         head={
           <DatasetHead data={data} invented={example !== null} onEdit={() => setEditing(true)} keep={keep} />
         }
@@ -136,7 +168,10 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
       busy={isPending}
       hasResult={data !== null}
       onSource={change}
-      onDraft={setDraft}
+      onDraft={(next) => {
+        setDraft(next);
+        setRestated(null);
+      }}
       onRefused={(detail) => setOutcome({ kind: 'refused', title: 'This file was not taken', detail })}
       onAssess={() => mutate({ source, draft, example })}
       onExample={(slug) => void open(slug)}
@@ -144,6 +179,17 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
       onResult={() => setEditing(false)}
       keep={keep}
     />
+  );
+}
+
+function RestatedBand({ restated, onUndo }: { restated: Restated; onUndo: () => void }) {
+  const { reading, becameDocument } = restated;
+  return (
+    <StatedBand noun={reading.noun} label={reading.label} onUndo={onUndo}>
+      {becameDocument
+        ? 'Your table has become a document, since its form has no place for this.'
+        : 'What you pasted now says so.'}
+    </StatedBand>
   );
 }
 

@@ -20,14 +20,27 @@ export function draftOfDocument(document: DatasetDocument, table: CsvPoints): Cs
   };
 }
 
-function parametersDraft({ origin, gap, siteClasses }: Parameters, empty: ParametersDraft): ParametersDraft {
-  const [{ sites, binding }] = siteClasses;
+/** The form of one set of parameters; what the form has that they lack stays as it was. */
+export function parametersDraft(stated: Parameters, empty: ParametersDraft): ParametersDraft {
+  const { origin, siteClasses, modulation = [] } = stated;
+  const [{ sites, binding, gapPerSite }] = siteClasses;
+  const gap = stated.gap ?? gapPerSite;
   return {
     ...empty,
     origin,
     gap: gap
       ? { value: String(gap.value), u: textOf(gap.u), unit: gap.unit, orientation: gap.orientation }
       : empty.gap,
+    gapScope: stated.gap ? 'complex' : 'site',
+    modulation: {
+      ...empty.modulation,
+      ...Object.fromEntries(
+        modulation.map(({ modulator, slope: { value, u, unit, orientation }, reference }) => [
+          modulator,
+          { value: String(value), u: textOf(u), unit, orientation, reference: String(reference) },
+        ]),
+      ),
+    },
     sites: { value: String(sites.value), u: textOf(sites.u) },
     binding: Object.fromEntries(
       binding.map(({ ligand, inactive, active }) => [

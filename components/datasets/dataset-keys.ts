@@ -17,8 +17,12 @@ export function overlayPath(filters: DatasetFilters): string {
   return parameters === '' ? '/api/v1/overlay' : `/api/v1/overlay?${parameters}`;
 }
 
+export function datasetPath(accession: string): string {
+  return `/api/v1/datasets/${encodeURIComponent(accession)}`;
+}
+
 export function pointsPath(accession: string): string {
-  return `/api/v1/datasets/${encodeURIComponent(accession)}/points?format=json`;
+  return `${datasetPath(accession)}/points?format=json`;
 }
 
 export const listKey = (path: string) => ['datasets', path] as const;

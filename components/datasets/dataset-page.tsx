@@ -11,7 +11,7 @@ import { readPoint } from './point-address';
 import { PublishedHead } from './published-head';
 import { type DocumentHead, publishedPlotData } from './published-plot-data';
 import { ReadFailure } from './read-failure';
-import { useDatasetPoints } from './use-collection';
+import { useDatasetPoints, useWholeDocument } from './use-collection';
 import { useLook } from './use-look';
 
 /** What the page of a dataset shows, its points aside. */
@@ -27,6 +27,7 @@ interface DatasetPageProps {
 export function DatasetPage({ dataset, opening }: DatasetPageProps) {
   const { document, assessment, accession, revision } = dataset;
   const { data: answer, error, refetch } = useDatasetPoints(`${accession}.${revision}`, true);
+  const wholeDocument = useWholeDocument(`${accession}.${revision}`);
   const [look, setLook] = useLook(
     opening,
     document.ligands.map(({ id }) => id),
@@ -43,6 +44,7 @@ export function DatasetPage({ dataset, opening }: DatasetPageProps) {
         head={<PublishedHead dataset={dataset} />}
         marked={marked}
         aside={marked === null ? null : <MarkedPoint data={data} place={marked} />}
+        wholeDocument={wholeDocument}
         flaggedFirst={assessment.summary.warning + assessment.summary.offCurve > 0}
         pending={
           answer ? undefined : (

@@ -1,10 +1,19 @@
 /** What browsing reads from API v1, kept in one cache. */
-import { keepPreviousData, useInfiniteQuery, useQuery } from '@tanstack/react-query';
+import { keepPreviousData, useInfiniteQuery, useQuery, useQueryClient } from '@tanstack/react-query';
 import { type OverlayPoint, pointsFrom } from '@/components/plots/overlay-view';
-import type { DatasetList, DatasetPoints } from '@/schemas/dataset-answers';
+import type { DatasetDocument } from '@/schemas/dataset-1.generated';
+import type { DatasetAnswer, DatasetList, DatasetPoints } from '@/schemas/dataset-answers';
 import type { DatasetFilters } from '@/schemas/dataset-query';
 import type { Overlay } from '@/schemas/overlay';
-import { listKey, listPath, overlayKey, overlayPath, pointsKey, pointsPath } from './dataset-keys';
+import {
+  datasetPath,
+  listKey,
+  listPath,
+  overlayKey,
+  overlayPath,
+  pointsKey,
+  pointsPath,
+} from './dataset-keys';
 import { fetchAnswer } from './fetch-answer';
 
 /** The list of a selection, page after page; while another selection is on its way the last one stays. */
@@ -67,4 +76,18 @@ export function useDatasetPoints(accession: string, wanted: boolean) {
     enabled: wanted,
     staleTime: Number.POSITIVE_INFINITY,
   });
+}
+
+/** Fetches the document of a dataset, points with their uncertainties and all; asked for once. */
+export function useWholeDocument(accession: string): () => Promise<DatasetDocument> {
+  const client = useQueryClient();
+  const path = datasetPath(accession);
+  return async () => {
+    const answer = await client.fetchQuery({
+      queryKey: ['dataset', accession],
+      queryFn: ({ signal }) => fetchAnswer<DatasetAnswer>(path, signal),
+      staleTime: Number.POSITIVE_INFINITY,
+    });
+    return answer.document as unknown as DatasetDocument;
+  };
 }

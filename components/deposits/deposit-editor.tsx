@@ -3,6 +3,7 @@
 import { useEffect, useRef, useState } from 'react';
 import { AxisFrame } from '@/components/layout/axis-frame';
 import { ScrollingCell } from '@/components/layout/scrolling-cell';
+import { TrialBand } from '@/components/reasons/trial-band';
 import { Button } from '@/components/ui/button';
 import type { SelectOption } from '@/components/ui/select-field';
 import { selectLine } from '@/components/ui/select-line';
@@ -16,6 +17,7 @@ import { DocumentText } from './document-text';
 import { accessTo, isUnchanged } from './draft-access';
 import { DraftBar } from './draft-bar';
 import { DraftCollapse } from './draft-collapse';
+import { DraftReasons, useDraftReasons } from './draft-reasons';
 import { DraftStatus, DraftVerdict } from './draft-status';
 import { listOf, objectOf, readDraft, textOf } from './draft-value';
 import { EditorSections } from './editor-sections';
@@ -102,6 +104,7 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
   const access = accessTo(content.value, saved.content.value, worded, draft.set);
   const showOffCurve = useOffCurveSteps(assessed?.data ?? null, go);
   const isStale = assessed !== null && assessed.value !== content.value;
+  const reasons = useDraftReasons(assessed?.data ?? null, draft, isStale);
   const shownSeries = Math.min(series, Math.max(0, listOf(content.value.series).length - 1));
   const complaint = calls.complaint;
   const takeUp = (kept: string) => {
@@ -171,7 +174,15 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
             edit === null ? (
               <div className="flex h-full flex-col">
                 {assessed ? (
-                  <DraftCollapse data={assessed.data} series={shownSeries} onSeries={choose} />
+                  <>
+                    <TrialBand stated={assessed.data} trials={reasons.trials} />
+                    <DraftCollapse
+                      data={reasons.trials.drawn?.data ?? assessed.data}
+                      opening={reasons.trials.drawn?.window}
+                      series={shownSeries}
+                      onSeries={choose}
+                    />
+                  </>
                 ) : (
                   <p className="border-hairline border-b px-2 py-3 text-soft max-lg:px-0">
                     {saved.errors.length > 0
@@ -242,11 +253,15 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
                 />
               ) : null}
               {assessed ? (
-                <DraftVerdict
-                  summary={assessed.data.assessment.summary}
-                  isStale={isStale}
-                  onOffCurve={showOffCurve}
-                />
+                <>
+                  <DraftVerdict
+                    summary={(reasons.trials.trial ?? assessed).data.assessment.summary}
+                    isStale={isStale}
+                    isTrial={reasons.trials.trial !== null}
+                    onOffCurve={showOffCurve}
+                  />
+                  <DraftReasons data={assessed.data} reasons={reasons} />
+                </>
               ) : null}
               <ProblemNotice error={error} isKept />
               <DepositFiles id={id} initial={files} editable />

@@ -5,7 +5,7 @@ import type { Look } from '@/components/assessed/assessed-view';
 import { CollapseSwitch } from '@/components/assessed/collapse-switch';
 import { sentenceOn } from '@/components/assessed/summary-sentence';
 import { CollapsePanel } from '@/components/plots/collapse-panel';
-import { fullWindow, openingWindow } from '@/components/plots/energy-window';
+import { type EnergyWindow, fullWindow, openingWindow } from '@/components/plots/energy-window';
 import { energiesOf, type PlotData, pointsOf } from '@/components/plots/plot-data';
 import { WindowRuler } from '@/components/plots/window-ruler';
 
@@ -14,14 +14,16 @@ interface DraftCollapseProps {
   /** the series that is being edited: its points are lit */
   series: number;
   onSeries: (series: number) => void;
+  /** the window while none is chosen */
+  opening?: EnergyWindow;
 }
 
 /** The collapse of the draft as it was last saved, with its ruler. */
-export function DraftCollapse({ data, series, onSeries }: DraftCollapseProps) {
+export function DraftCollapse({ data, series, onSeries, opening }: DraftCollapseProps) {
   const [chosen, setLook] = useState<Partial<Look>>({});
   const known = data.document.ligands.some(({ id }) => id === chosen.byLigand);
   const look: Look = {
-    window: chosen.window ?? openingWindow(pointsOf(data)),
+    window: chosen.window ?? opening ?? openingWindow(pointsOf(data)),
     byLigand: known ? (chosen.byLigand ?? null) : null,
   };
   const several = data.series.length > 1;

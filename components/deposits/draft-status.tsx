@@ -70,10 +70,12 @@ interface DraftVerdictProps {
   isStale: boolean;
   /** leads to the points off the curve, one after the other */
   onOffCurve: () => void;
+  /** the figures are those of a trial */
+  isTrial?: boolean;
 }
 
 /** What the assessment amounts to, in a few figures. */
-export function DraftVerdict({ summary, isStale, onOffCurve }: DraftVerdictProps) {
+export function DraftVerdict({ summary, isStale, onOffCurve, isTrial = false }: DraftVerdictProps) {
   return (
     <section aria-label="Verdict" className="mt-5 border-ink border-t pt-3">
       <p className="font-serif">
@@ -81,8 +83,8 @@ export function DraftVerdict({ summary, isStale, onOffCurve }: DraftVerdictProps
         <span className="text-soft text-xl">/ {formatCount(summary.points)}</span>
       </p>
       <p className="text-sm text-soft">
-        points on the curve, RMS <MathSymbol>z</MathSymbol> {formatScore(summary.rmsZ)},{' '}
-        <MathSymbol>p</MathSymbol> {formatPValue(summary.pValue)}
+        points on the curve{isTrial ? ' in the trial' : ''}, RMS <MathSymbol>z</MathSymbol>{' '}
+        {formatScore(summary.rmsZ)}, <MathSymbol>p</MathSymbol> {formatPValue(summary.pValue)}
       </p>
       <FlagCounts counts={summary} onOffCurve={onOffCurve} />
       {isStale ? <p className="mt-2 text-sm text-soft">Of the draft as it was last saved.</p> : null}

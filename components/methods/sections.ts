@@ -9,6 +9,11 @@ export const SECTIONS = [
   { id: 'flags', title: 'Residual and flags' },
   { id: 'collapse', title: 'Series and dataset as a whole' },
   { id: 'derived', title: 'Derived quantities' },
+  { id: 'shape', title: 'Why a series misses: shape' },
+  { id: 'conventions', title: 'Why a series misses: conventions' },
+  { id: 'normalisation', title: 'Why a series misses: normalisation' },
+  { id: 'refit', title: 'Refit' },
+  { id: 'monte-carlo', title: 'Monte Carlo check' },
   { id: 'not-judged', title: 'What is not yet judged' },
   { id: 'sources', title: 'Sources' },
 ] as const;

@@ -1,7 +1,8 @@
 'use client';
 
 import dynamic from 'next/dynamic';
-import { useEffect, useMemo, useRef, useState, useSyncExternalStore } from 'react';
+import { useEffect, useMemo, useRef, useState } from 'react';
+import { STILL, useMedia } from '@/components/ui/use-media';
 import { TRAVEL_MILLISECONDS } from './collapse-option';
 import { concentrationAxisOf } from './concentration-axis';
 import type { EnergyWindow } from './energy-window';
@@ -27,8 +28,6 @@ export interface CollapsePanelProps {
   onPoint?: (place: PointPlace | null) => void;
   onChoose?: (place: PointPlace) => void;
 }
-
-const STILL = '(prefers-reduced-motion: reduce)';
 
 /** The collapse, the residual panel under it, and the words that stand in them. */
 export function CollapsePanel(props: CollapsePanelProps) {
@@ -65,16 +64,4 @@ function useJustChanged(value: unknown, milliseconds: number): boolean {
     return () => clearTimeout(timer);
   }, [value, milliseconds]);
   return settled !== value;
-}
-
-function useMedia(query: string): boolean {
-  return useSyncExternalStore(
-    (changed) => {
-      const media = matchMedia(query);
-      media.addEventListener('change', changed);
-      return () => media.removeEventListener('change', changed);
-    },
-    () => matchMedia(query).matches,
-    () => false,
-  );
 }

@@ -23,7 +23,10 @@ import {
   WINDOW_SECONDS,
 } from './computation-limits';
 
-/** Longer than any call can take (a minute for its body, half a minute to compute): after it a lease is a dead process's. */
+/**
+ * Longer than any assessment can take (a minute for its body, half a minute to compute): after it a lease is a dead
+ * process's.
+ */
 const LEASE_MS = 120_000;
 
 export interface Lease {
@@ -41,12 +44,14 @@ export type Admission =
  * Counts a call of an address and takes a place for it.
  *
  * @param mostPoints how many points the call can have at most; set aside until `endComputation`
+ * @param leaseMs after which the place is free again whatever happens
  */
 export async function admitComputation(
   addressKey: string,
   limits: ComputationLimits,
   mostPoints: number,
   nowMs = Date.now(),
+  leaseMs = LEASE_MS,
 ): Promise<Admission> {
   const now = Math.floor(nowMs / 1000);
   return write('counter', async (tx) => {
@@ -65,7 +70,7 @@ export async function admitComputation(
       id: lease.id,
       addressKey,
       reservedPoints: pointsBudget,
-      expiresAt: nowMs + LEASE_MS,
+      expiresAt: nowMs + leaseMs,
     });
     return {
       admitted: true,

@@ -4,18 +4,19 @@
  */
 import { type Quota, WINDOW_SECONDS } from './computation-limits';
 
-/** The headers that tell a caller its limits. */
+/** The headers that tell a caller its limits; of points only where they are limited. */
 export function limitHeaders(quota: Quota): Record<string, string> {
   const { limits, calls, points, atOnceLeft } = quota;
+  const limited = Number.isFinite(limits.pointsPerMinute);
   return {
     'RateLimit-Policy': [
       `"calls";q=${limits.callsPerMinute};w=${WINDOW_SECONDS}`,
-      `"points";q=${limits.pointsPerMinute};w=${WINDOW_SECONDS};qu="points"`,
+      ...(limited ? [`"points";q=${limits.pointsPerMinute};w=${WINDOW_SECONDS};qu="points"`] : []),
       `"at-once";q=${limits.atOnce};qu="concurrent-requests"`,
     ].join(', '),
     RateLimit: [
       `"calls";r=${calls.left};t=${calls.resetSeconds}`,
-      `"points";r=${points.left};t=${points.resetSeconds}`,
+      ...(limited ? [`"points";r=${points.left};t=${points.resetSeconds}`] : []),
       `"at-once";r=${atOnceLeft}`,
     ].join(', '),
   };

@@ -12,6 +12,7 @@ export type Hat = (typeof HATS)[number];
 
 export const ACTIONS = [
   'check-document',
+  'refit-document',
   'read-methods',
   'read-api-description',
   'read-health',
@@ -88,6 +89,7 @@ const READ_DEPOSIT: Row = {
 
 export const PERMISSIONS: Record<Action, Row> = {
   'check-document': EVERYONE,
+  'refit-document': EVERYONE,
   'read-methods': EVERYONE,
   'read-api-description': EVERYONE,
   'read-health': EVERYONE,

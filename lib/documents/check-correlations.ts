@@ -23,8 +23,10 @@ export const checkCorrelations: MeaningCheck = (document, report) => {
       const { a, b, r } = pair;
       const [one, other] = [keyOf(a, base), keyOf(b, base)];
       if (one !== other) own.add(one, other, r);
-      sharesQuantities ||= a.statement.sharedAs !== undefined || b.statement.sharedAs !== undefined;
-      if (compareShared(sharedPairs, pair, base, report)) dataset.add(one, other, r);
+      // A series' own quantities are taken as independent of other series given what is shared: they cannot clash there.
+      const bothShared = a.statement.sharedAs !== undefined && b.statement.sharedAs !== undefined;
+      sharesQuantities ||= bothShared;
+      if (compareShared(sharedPairs, pair, base, report) && bothShared) dataset.add(one, other, r);
     }
     const verdict = own.canHold();
     if (verdict === 'no') report(place, IMPOSSIBLE);

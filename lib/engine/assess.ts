@@ -3,15 +3,25 @@
  * deterministic: the same document gives the same assessment, on the server and in a browser.
  */
 import { adjustPValues } from './adjust-p-values';
-import type { AssessedPoint, Assessment, AssessmentSummary, Flag, SeriesAssessment } from './assessment';
+import type {
+  AssessedPoint,
+  Assessment,
+  AssessmentSummary,
+  Flag,
+  Note,
+  SeriesAssessment,
+} from './assessment';
+import { datasetConventions, findConventions } from './conventions';
 import { datasetQ } from './dataset-q';
 import { deriveQuantities } from './derived';
 import { expectedByChance, flagOf, POLICY } from './flags';
 import type { DatasetInput, SeriesInput } from './inputs';
+import { noteLinearUncertainty } from './monte-carlo';
 import { notesOn } from './notes';
 import { computePointTable, type PointTable } from './point-table';
 import { type ScoredSeries, seriesQ } from './q-statistic';
 import { buildSeriesModel } from './series-model';
+import { fitShape } from './shape';
 import { ENGINE_VERSION } from './version';
 
 /**
@@ -23,11 +33,12 @@ import { ENGINE_VERSION } from './version';
 export function assess(dataset: DatasetInput): Assessment {
   const scored = dataset.series.map((series) => scoreSeries(dataset, series));
   const q = adjustPValues(concatenate(scored.map(({ table }) => table.pValue)));
+  const linearity = noteLinearUncertainty(dataset, scored);
   let first = 0;
   const series = scored.map((one, i) => {
     const points = assessedPoints(one.table, q, first);
     first += one.table.count;
-    return assessSeries(dataset, dataset.series[i], one, points);
+    return assessSeries(dataset, dataset.series[i], one, points, linearity[i]);
   });
   return { engine: ENGINE_VERSION, policy: POLICY.number, summary: summarise(series, scored), series };
 }
@@ -48,8 +59,10 @@ function assessSeries(
   series: SeriesInput,
   scored: ScoredSeries,
   points: AssessedPoint[],
+  linearity: readonly Note[],
 ): SeriesAssessment {
   const { model, table } = scored;
+  const q = seriesQ(scored);
   const { derived, notes } = deriveQuantities(dataset, model);
   return {
     id: series.id,
@@ -57,9 +70,11 @@ function assessSeries(
     temperatureK: model.temperatureKelvin,
     gapKT: model.gapKT,
     sites: model.sites.reduce((sum, n) => sum + n, 0),
-    ...seriesQ(scored),
+    ...q,
     derived,
-    notes: [...notesOn(dataset, series, table), ...notes],
+    shape: fitShape(dataset, series, scored),
+    conventions: findConventions(dataset, series, scored, q),
+    notes: [...notesOn(dataset, series, table), ...linearity, ...notes],
     points,
   };
 }
@@ -98,6 +113,10 @@ function summarise(series: readonly SeriesAssessment[], scored: readonly ScoredS
     offCurve: counts['off-curve'],
     ...datasetQ(scored),
     expectedByChance: expectedByChance(points),
+    conventions: datasetConventions(
+      scored,
+      series.map((one) => one.conventions),
+    ),
   };
 }
 

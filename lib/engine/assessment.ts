@@ -4,7 +4,7 @@
  * `notes`).
  */
 import type { ParameterOrigin } from './inputs';
-import type { ConcentrationUnit } from './units';
+import type { ConcentrationUnit, EnergyUnit } from './units';
 
 export type Flag = 'on-curve' | 'warning' | 'off-curve';
 
@@ -23,7 +23,11 @@ export type NoteCode =
   | 'correlations-not-stated'
   | 'depletion'
   | 'derived-not-defined'
-  | 'no-degrees-of-freedom';
+  | 'linear-uncertainty'
+  | 'no-degrees-of-freedom'
+  | 'normalisation'
+  | 'protein-concentration-not-stated'
+  | 'uncertainty-too-wide';
 
 export interface Note {
   code: NoteCode;
@@ -73,6 +77,53 @@ export interface QStatistic {
   rmsZ: number;
 }
 
+/** One-step alternatives to the stated parameters, and two pairs of them. */
+export type ShapeKind = 'offset' | 'slope' | 'ceiling' | 'floor' | 'stock' | 'offset+slope' | 'floor+ceiling';
+
+/** offset in kT; slope, ceiling (A), floor (B) and stock (α) are plain numbers. */
+export type ShapeEstimateName = 'offset' | 'slope' | 'ceiling' | 'floor' | 'stock';
+
+export interface ShapeEstimate extends Estimate {
+  name: ShapeEstimateName;
+}
+
+export interface ShapeAlternative {
+  kind: ShapeKind;
+  estimates: ShapeEstimate[];
+  /** AIC of the alternative less that of the stated parameters: negative favours the alternative */
+  deltaAIC: number;
+}
+
+export interface Shape {
+  /** the alternative that is named, `none` where no AIC is at least 8 below that of the stated parameters */
+  best: ShapeKind | 'none';
+  /** the offset that the stated uncertainties alone would allow: mean of √(gᵀVg), kT */
+  allowedByStatements: number;
+  /** those that the series has points enough for, lowest AIC first */
+  alternatives: ShapeAlternative[];
+}
+
+/** A discrete misreading of what the laboratory stated. */
+export type Misreading =
+  | { misreading: 'gap-orientation' }
+  | { misreading: 'gap-scope' }
+  | { misreading: 'swapped-constants' }
+  | { misreading: 'inverted-activity' }
+  /** `factor`: what the stated concentrations must be multiplied by */
+  | { misreading: 'concentration-scale'; factor: number }
+  /** `unit`: what the gap's number is in */
+  | { misreading: 'gap-unit'; unit: EnergyUnit }
+  | { misreading: 'association-constants' }
+  /** `base`: whether the number of the ratio is its common or its natural logarithm */
+  | { misreading: 'log-ratio'; base: '10' | 'e' };
+
+/** A misreading that explains a series, with what it brings the residuals to. */
+export type ConventionFinding = Misreading & {
+  rmsZ: number;
+  /** Σz² with the misreading less Σz² as stated */
+  deltaSumZ2: number;
+};
+
 export interface SeriesAssessment extends QStatistic {
   id: string;
   origin: ParameterOrigin;
@@ -82,6 +133,9 @@ export interface SeriesAssessment extends QStatistic {
   /** Σ n_s */
   sites: number;
   derived: DerivedQuantities[];
+  shape: Shape;
+  /** best first */
+  conventions: ConventionFinding[];
   notes: Note[];
   points: AssessedPoint[];
 }
@@ -93,6 +147,8 @@ export interface AssessmentSummary extends QStatistic {
   offCurve: number;
   /** how many points chance alone would flag */
   expectedByChance: { warning: number; offCurve: number };
+  /** misreadings that every series shows, best first */
+  conventions: ConventionFinding[];
 }
 
 export interface Assessment {

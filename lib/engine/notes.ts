@@ -1,19 +1,26 @@
 /** What a reader has to know of a series before trusting its figures, in sentences. */
 import type { Note } from './assessment';
+import { noteDepletion } from './depletion-note';
 import { POLICY } from './flags';
 import type { DatasetInput, ParametersInput, SeriesInput } from './inputs';
-import type { MeasuredActivity } from './measured-activity';
-import { convertConcentration } from './units';
+import { noteNormalisation } from './normalisation-note';
+import type { PointTable } from './point-table';
+import { counted } from './sentence-words';
 
-/** Share of the ligand that the protein may bind before a total concentration misleads. */
-const DEPLETION_SHARE = 0.1;
+/** Beyond this u_r an activity may be 0.4 off the curve, nearly half of its range, and still be within 2 u_r. */
+const WIDE_RESIDUAL_U = 0.2;
 
-/** Notes on a series: circularity, unstated correlations, assumed uncertainties, no freedom left, depletion. */
-export function notesOn(dataset: DatasetInput, series: SeriesInput, measured: MeasuredActivity): Note[] {
+/**
+ * Notes on a series: circularity, unstated correlations, assumed or very wide uncertainties, no freedom left,
+ * normalisation, depletion.
+ */
+export function notesOn(dataset: DatasetInput, series: SeriesInput, table: PointTable): Note[] {
   return [
     ...noteCircularity(series),
     ...noteCorrelations(series.parameters),
-    ...noteAssumedUncertainty(measured),
+    ...noteAssumedUncertainty(table),
+    ...noteWideUncertainty(table),
+    ...noteNormalisation(dataset, table),
     ...noteDepletion(dataset, series),
   ];
 }
@@ -47,7 +54,7 @@ function noteCorrelations({ origin, correlations }: ParametersInput): Note[] {
   ];
 }
 
-function noteAssumedUncertainty({ uncertainty }: MeasuredActivity): Note[] {
+function noteAssumedUncertainty({ uncertainty }: PointTable): Note[] {
   const points = [...uncertainty.keys()].filter((i) => uncertainty[i] === 'assumed');
   if (points.length === 0) return [];
   return [
@@ -59,35 +66,15 @@ function noteAssumedUncertainty({ uncertainty }: MeasuredActivity): Note[] {
   ];
 }
 
-function noteDepletion(dataset: DatasetInput, series: SeriesInput): Note[] {
-  const protein = dataset.assay?.proteinConcentration;
-  if (!protein) return [];
-  return dataset.ligands.flatMap((ligand) => {
-    if (ligand.concentration !== 'total') return [];
-    const proteinInLigandUnit = convertConcentration(protein.value, protein.unit, ligand.unit);
-    if (proteinInLigandUnit === null) return [];
-    const capacity = proteinInLigandUnit * sitesFor(series.parameters, ligand.id);
-    const points = [...series.points.keys()].filter((i) => {
-      const total = series.points[i].ligands[ligand.id] ?? 0;
-      return total > 0 && capacity > DEPLETION_SHARE * total;
-    });
-    if (points.length === 0) return [];
-    return [
-      {
-        code: 'depletion' as const,
-        detail: `At ${counted(points.length, 'point', 'points')} the protein could bind more than a tenth of ${ligand.name ?? ligand.id}, whose total concentration is stated: the energy is computed from a concentration that the protein itself has lowered.`,
-        points,
-      },
-    ];
-  });
-}
-
-function sitesFor(parameters: ParametersInput, ligand: string): number {
-  return parameters.siteClasses
-    .filter((siteClass) => siteClass.binding.some((binding) => binding.ligand === ligand))
-    .reduce((sum, siteClass) => sum + siteClass.sites.value, 0);
-}
-
-function counted(count: number, one: string, many: string): string {
-  return `${count} ${count === 1 ? one : many}`;
+/** Where at least half of the points could hardly have missed, that they lie on the curve says little. */
+function noteWideUncertainty({ residualU, count }: PointTable): Note[] {
+  const points = [...residualU.keys()].filter((i) => residualU[i] > WIDE_RESIDUAL_U);
+  if (points.length === 0 || 2 * points.length < count) return [];
+  return [
+    {
+      code: 'uncertainty-too-wide',
+      detail: `At ${points.length} of ${counted(count, 'point', 'points')} the uncertainty of the residual is above ${WIDE_RESIDUAL_U}: an activity ${2 * WIDE_RESIDUAL_U} off the curve would still pass there, so these points hardly test it.`,
+      points,
+    },
+  ];
 }

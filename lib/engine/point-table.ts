@@ -22,6 +22,8 @@ import { normalTwoSided, studentTwoSided } from './tails';
 export interface PointTable extends MeasuredActivity {
   /** number of points, m */
   count: number;
+  /** u_0, in activity */
+  modelFloor: number;
   /** f, kT */
   energy: Float64Array;
   energyU: Float64Array;
@@ -38,17 +40,23 @@ export interface PointTable extends MeasuredActivity {
   dispensingVariance: Float64Array;
 }
 
-/** Computes the table of a series. */
+/**
+ * Computes the table of a series.
+ *
+ * @param modelFloor u_0, in activity; that of the policy unless a simulation knows the model to be exact
+ */
 export function computePointTable(
   dataset: DatasetInput,
   series: SeriesInput,
   model: SeriesModel,
+  modelFloor: number = POLICY.modelFloor,
 ): PointTable {
   const { points } = series;
   const count = points.length;
   const columns = model.sharedKeys.length;
   const table: PointTable = {
     count,
+    modelFloor,
     ...measureActivity(points),
     energy: new Float64Array(count),
     energyU: new Float64Array(count),
@@ -134,10 +142,10 @@ export function quadraticForm(
 }
 
 function fillScores(table: PointTable, fittedHere: boolean): void {
-  const { activityU, expectedU, degreesOfFreedom } = table;
+  const { activityU, expectedU, degreesOfFreedom, modelFloor } = table;
   for (let i = 0; i < table.count; i++) {
     const modelVariance = fittedHere ? 0 : expectedU[i] ** 2;
-    const variance = activityU[i] ** 2 + modelVariance + POLICY.modelFloor ** 2;
+    const variance = activityU[i] ** 2 + modelVariance + modelFloor ** 2;
     table.residual[i] = table.activity[i] - table.expected[i];
     table.residualU[i] = Math.sqrt(variance);
     const z = table.residual[i] / table.residualU[i];

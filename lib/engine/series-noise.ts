@@ -3,7 +3,6 @@
  * series by itself, and the series as a part of its dataset, where quantities that several series share
  * are kept apart.
  */
-import { POLICY } from './flags';
 import { choleskySemidefinite, timesLower } from './linear-algebra';
 import type { PointTable } from './point-table';
 import type { SeriesModel } from './series-model';
@@ -12,7 +11,7 @@ import type { SeriesModel } from './series-model';
 export function independentVariance(table: PointTable): Float64Array {
   const diagonal = new Float64Array(table.count);
   for (let i = 0; i < table.count; i++) {
-    diagonal[i] = table.activityU[i] ** 2 + POLICY.modelFloor ** 2 + table.dispensingVariance[i];
+    diagonal[i] = table.activityU[i] ** 2 + table.modelFloor ** 2 + table.dispensingVariance[i];
   }
   return diagonal;
 }

@@ -6,6 +6,7 @@ const OPTIONS: BuildOptions = {
     serve: 'lib/serving/serve.ts',
     migrate: 'db/migrate.ts',
     'assessment-worker': 'lib/assessments/assessment-worker.ts',
+    'refit-worker': 'lib/refits/refit-worker.ts',
   },
   outdir: '.build',
   bundle: true,

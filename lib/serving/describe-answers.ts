@@ -41,3 +41,11 @@ export function problems(...codes: ErrorCode[]): Responses {
 export function text(description: string) {
   return { description, schema: { type: 'string' } } as const;
 }
+
+/** The headers that tell a caller its limits. */
+export const LIMIT_HEADERS = {
+  RateLimit: text('What is left of each limit (draft-ietf-httpapi-ratelimit-headers-10)'),
+  'RateLimit-Policy': text(
+    'The limits of one address: calls and, of assessments, points a minute; calls at a time',
+  ),
+};

@@ -6,21 +6,19 @@ import { assessmentSchema } from '@/schemas/assessment';
 import datasetSchema from '@/schemas/dataset-1.schema.json';
 import { healthSchema } from '@/schemas/health';
 import { problemKindSchema } from '@/schemas/problem';
-import { type ComponentSchema, problems, type Registry, text, unchanging } from './describe-answers';
+import { type ComponentSchema, LIMIT_HEADERS, problems, type Registry, unchanging } from './describe-answers';
 import { registerDeposits } from './describe-deposits';
 import { registerReading } from './describe-reading';
+import { registerRefits } from './describe-refits';
 
 const DATASET = 'Dataset';
-const LIMIT_HEADERS = {
-  RateLimit: text('What is left of each limit (draft-ietf-httpapi-ratelimit-headers-10)'),
-  'RateLimit-Policy': text('The limits of one address: calls and points a minute, calls at a time'),
-};
 
 /** The whole description, ready to be sent as JSON. */
 export function describeApi(): Record<string, unknown> {
   const registry = new OpenAPIRegistry();
   registerDataset(registry);
   registerAssessments(registry);
+  registerRefits(registry, `#/components/schemas/${DATASET}`);
   registerReads(registry);
   registerReading(registry);
   registerDeposits(registry);

@@ -7,6 +7,11 @@ export const CLOSED_POLICY =
 /** For a file that somebody uploaded: whatever a browser makes of it, it is nobody's page. */
 const DOWNLOAD_POLICY = `${CLOSED_POLICY}; sandbox`;
 
+/** For the script that a worker starts with: it loads the rest of itself from here, and reaches nothing else. */
+const WORKER_POLICY = `${CLOSED_POLICY}; script-src 'self'`;
+
+const WORKERS = /^\/_next\/static\/chunks\/turbopack-worker-[^/?#]+\.js/;
+
 const DOWNLOADS = /^\/api\/v1\/deposits\/[^/?#]+\/files\/[^/?#]/;
 
 /** Features of browsers that no page of this site uses. */
@@ -47,6 +52,7 @@ export function securityHeaders(appUrl: string): Record<string, string> {
 
 /** The content policy of an address before a page puts its own in the place. Next takes none of a route handler. */
 export function policyOfAddress(url: string): string {
+  if (WORKERS.test(url)) return WORKER_POLICY;
   return DOWNLOADS.test(url) ? DOWNLOAD_POLICY : CLOSED_POLICY;
 }
 
@@ -63,6 +69,7 @@ export function pagePolicy(nonce: string, development: boolean): string {
     `style-src 'self' 'nonce-${nonce}'`,
     "img-src 'self' blob: data:",
     "font-src 'self'",
+    "worker-src 'self'",
     `connect-src 'self'${development ? ' ws:' : ''}`,
     "base-uri 'none'",
     "form-action 'self'",

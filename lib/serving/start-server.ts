@@ -1,6 +1,6 @@
 /**
  * The server: Node's own HTTP server in front of Next, since only the socket knows who is calling. It knows nothing
- * of the application but its database and its worker threads, which it opens and closes.
+ * of the application but its database, its worker threads and its jobs, which it opens and closes.
  */
 import { createServer, type IncomingMessage, type Server, type ServerResponse } from 'node:http';
 import type { AddressInfo } from 'node:net';
@@ -8,9 +8,12 @@ import { applyMigrations } from '@/db/apply-migrations';
 import { closeDatabase } from '@/db/client';
 import { closeAssessmentPool } from '@/lib/assessments/assessment-pool';
 import { checkEnvOrExit, type Env } from '@/lib/env';
+import { JOB_HANDLERS } from '@/lib/jobs/handlers';
 import { startChores } from '@/lib/jobs/run-chores';
+import { runJobs } from '@/lib/jobs/run-jobs';
 import { log } from '@/lib/log';
 import { endDemonstrationSessions } from '@/lib/people/demonstration-only';
+import { closeRefitPool } from '@/lib/refits/refit-pool';
 import { startLocalStorage, stopLocalStorage } from '@/storage/local-server';
 import { bodyBounds, LONGEST_BODY_MS } from './body-bounds';
 import { withLateAnswer } from './late-answer';
@@ -48,9 +51,10 @@ export async function startServer({ development }: { development: boolean }): Pr
   answerWith(server, handle, env);
   await listen(server, env);
   const chores = startChores();
+  const jobs = runJobs(JOB_HANDLERS);
   stopOnSignal(server, async () => {
-    await chores.stop();
-    await closeAssessmentPool();
+    await Promise.all([chores.stop(), jobs.stop()]);
+    await Promise.all([closeAssessmentPool(), closeRefitPool()]);
     await closeDatabase();
     await stopLocalStorage();
   });

@@ -36,7 +36,7 @@ describe('pages', () => {
     expect(Buffer.from(nonce, 'base64').byteLength).toBeGreaterThanOrEqual(16);
     expect(policy).toBe(
       `default-src 'none'; script-src 'nonce-${nonce}' 'strict-dynamic'; style-src 'self' 'nonce-${nonce}'; ` +
-        `img-src 'self' blob: data:; font-src 'self'; connect-src 'self'; base-uri 'none'; form-action 'self'; frame-ancestors 'none'`,
+        `img-src 'self' blob: data:; font-src 'self'; worker-src 'self'; connect-src 'self'; base-uri 'none'; form-action 'self'; frame-ancestors 'none'`,
     );
     const html = await response.text();
     const scripts = [...html.matchAll(/<script\b[^>]*>/g)].map((match) => match[0]);

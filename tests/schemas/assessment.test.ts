@@ -6,9 +6,14 @@ import type { Assessment } from '@/lib/engine/assessment';
 import { assessmentSchema } from '@/schemas/assessment';
 import { exampleDocument } from '@/tests/support/example-document';
 
+/** The same type with every intersection written out, since `A & B` is no plain object to `toEqualTypeOf`. */
+type WrittenOut<T> = T extends object ? { [K in keyof T]: WrittenOut<T[K]> } : T;
+type OfSchema = WrittenOut<z.infer<typeof assessmentSchema>>;
+type OfEngine = WrittenOut<Assessment>;
+
 it('the schema of the assessment and the type of the engine are the same', () => {
-  expectTypeOf<z.infer<typeof assessmentSchema>>().toEqualTypeOf<Assessment>();
-  expectTypeOf<Assessment>().toEqualTypeOf<z.infer<typeof assessmentSchema>>();
+  expectTypeOf<OfSchema>().toEqualTypeOf<OfEngine>();
+  expectTypeOf<OfEngine>().toEqualTypeOf<OfSchema>();
 });
 
 it('what the engine computes fits the schema', () => {

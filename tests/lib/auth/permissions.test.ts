@@ -18,6 +18,7 @@ import { DEPOSIT_STATES } from '@/schemas/deposit-states';
  */
 const TABLE: Record<Action, Record<string, string>> = {
   'check-document': everyone(),
+  'refit-document': everyone(),
   'read-methods': everyone(),
   'read-api-description': everyone(),
   'read-health': everyone(),

@@ -309,6 +309,15 @@ describe('shared quantities', () => {
       { pointer: '/series', detail: `with what is shared between series, ${IMPOSSIBLE}` },
     ]);
   });
+
+  it('may each be strongly correlated with what is the own of many series, as in a global fit', () => {
+    const own = ['a', 'b', 'c'].map((id) => {
+      const series = shared(id, 0.1, A);
+      const { sharedAs: _, ...gap } = series.parameters.gap;
+      return { ...series, parameters: { ...series.parameters, gap } };
+    });
+    expect(errorsOf({ '/series': own })).toEqual([]);
+  });
 });
 
 describe('the check character of an ORCID iD', () => {

@@ -1,8 +1,10 @@
 /** The engine against published values, laws and closed forms; each block names its source. */
 import { describe, expect, it } from 'vitest';
 import { adjustPValues } from '@/lib/engine/adjust-p-values';
-import type { SiteClassInput } from '@/lib/engine/inputs';
+import { concentrationSlope, createSiteState, energyOf, occupySites } from '@/lib/engine/energy';
+import type { DatasetInput, SiteClassInput } from '@/lib/engine/inputs';
 import { logistic } from '@/lib/engine/logistic';
+import { buildSeriesModel } from '@/lib/engine/series-model';
 import { chiSquaredUpper, normalTwoSided, studentTwoSided } from '@/lib/engine/tails';
 import * as units from '@/lib/engine/units';
 import checks from '@/tests/reference/outside-checks.json';
@@ -29,6 +31,24 @@ function concerted(L: number, c: number, n: number, ...alphas: number[]) {
   return assessOne(
     datasetOf({ gap: allostericConstant(L), siteClasses: [siteClass(n, 1 / c, 1)] }, pointsAt(...alphas)),
   );
+}
+
+/** The same protein's model, and what its sites do at α. */
+function concertedAt(L: number, c: number, n: number, alpha: number) {
+  const dataset = datasetOf(
+    { gap: allostericConstant(L), siteClasses: [siteClass(n, 1 / c, 1)] },
+    pointsAt(alpha),
+  );
+  const model = buildSeriesModel(dataset, dataset.series[0]);
+  const state = createSiteState(model);
+  occupySites(model, Float64Array.of(alpha), 0, state);
+  const activity = logistic(energyOf(model, state));
+  return {
+    /** slope of a Hill plot of the activity, d ln(R̄/(1 − R̄))/d ln α = ∂f/∂ln c */
+    hillSlope: concentrationSlope(model, state, 0),
+    /** Ȳ, the fraction of sites that are occupied: no activity, but made of the same occupancies */
+    saturation: activity * state.occupancyActive[0] + (1 - activity) * state.occupancyInactive[0],
+  };
 }
 
 const ZERO = 1e-300; // relative tolerance whatever the size
@@ -84,6 +104,39 @@ describe('A03 haemoglobin (Monod, Wyman & Changeux, J Mol Biol 12, 88, 1965: L =
     expectClose(derived.halfActivity?.value ?? null, Number(wanted.alpha_half_R), 1e-12, 'half activity');
     expectClose(derived.ec50?.value ?? null, Number(wanted.EC50_over_KR_midpoint), 1e-12, 'EC50');
     expectClose(derived.effectiveHill?.value ?? null, Number(wanted.h_eff_midpoint), 1e-12, 'Hill');
+  });
+});
+
+describe('A03 to A05: binding and the steepest point (Ȳ and n_H of the same papers, outputs to 50 digits)', () => {
+  const a03 = figures('A03') as unknown as Record<string, string> & { Y: Record<string, string> };
+  it.each(Object.keys(a03.Y))('A03 occupied fraction of the sites at α = %s', (alpha) => {
+    const { saturation } = concertedAt(9054, 0.014, 4, Number(alpha));
+    expectClose(saturation, Number(a03.Y[alpha]), 1e-12, 'Y', ZERO);
+  });
+  it('A03 half of the sites are occupied where the paper has it, not where half are active', () => {
+    expectClose(concertedAt(9054, 0.014, 4, Number(a03.alpha_half_Y)).saturation, 0.5, 1e-12);
+    expect(concertedAt(9054, 0.014, 4, Number(a03.alpha_half_R)).saturation).toBeGreaterThan(0.51);
+  });
+  it('A04 Ȳ = 101/121 at α = 10', () => {
+    expectClose(concertedAt(1000, 0.01, 4, 10).saturation, 101 / 121, 1e-14);
+  });
+  it('A05 half of the sites are occupied where half of the protein is active', () => {
+    const alpha = Number(figures('A05').alpha_half_R_equals_alpha_half_Y);
+    expectClose(concertedAt(4e6, 5e-4, 4, alpha).saturation, 0.5, 1e-12);
+  });
+  it.each([
+    ['A03', 9054, 0.014, Number(a03.nH_R_max)],
+    ['A04', 1000, 0.01, 36 / 11],
+    ['A05', 4e6, 5e-4, Number(figures('A05').nH_R_max)],
+  ])('%s the Hill slope of the activity is steepest at α = 1/√c', (_, L, c, steepest) => {
+    const slopeAt = (alpha: number) => concertedAt(L, c, 4, alpha).hillSlope;
+    const alpha = 1 / Math.sqrt(c);
+    expectClose(slopeAt(alpha), steepest, 1e-12, 'slope', ZERO);
+    expect(slopeAt(alpha * 1.01)).toBeLessThan(steepest);
+    expect(slopeAt(alpha / 1.01)).toBeLessThan(steepest);
+  });
+  it('A03 gives that α itself', () => {
+    expectClose(1 / Math.sqrt(0.014), Number(a03.alpha_at_nH_R_max), 1e-12, 'α', ZERO);
   });
 });
 
@@ -174,9 +227,14 @@ describe('A07 effectors that bind one state alone shift L (Monod, Wyman & Change
       [{ ligands: { [LIGAND]: 10, inhibitor: 2, activator: 3 }, activity: 0.5, u: 0.02 }],
       { ligands },
     );
-    const [point] = assessOne(dataset).points;
+    dataset.series[0].points.push({
+      ...dataset.series[0].points[0],
+      ligands: { inhibitor: 2, activator: 3 },
+    });
+    const [point, without] = assessOne(dataset).points;
     expectClose(point.expected, Number(figures('A07').R), 1e-12, 'R');
     expectClose(point.energy, Number(figures('A07').F_over_kT), 1e-12, 'F');
+    expectClose(without.energy, -Math.log(Number(figures('A07').Lprime)), 1e-12, 'ln L′');
   });
 });
 
@@ -227,6 +285,65 @@ describe('A09 the master curve at extreme energies (analytic)', () => {
   it('never overflows', () => {
     expect(logistic(-1e6)).toBe(0);
     expect(logistic(1e6)).toBe(1);
+  });
+});
+
+describe('A10 a binding curve deposited as activity (Severinghaus, J Appl Physiol 46, 599, 1979: equation 1 from its abstract, Table 1 from a transcription)', () => {
+  const check = checks.checks.find(({ id }) => id === 'A10');
+  const table = check?.inputs as unknown as { table_pO2_Torr: number[]; table_S_percent: number[] };
+  const wanted = figures('A10') as unknown as Record<string, string> & { S: Record<string, string> };
+  // L = 9054, c = 0.014, n = 4 of the 1965 paper (from memory), and K_R so that half of its sites are occupied at
+  // the measured P50.
+  const active = Number(wanted.P50_Torr) / Number(figures('A03').alpha_half_Y);
+  const inTorr = (value: number) => ({ value, unit: 'Torr' as const, u: 0.05 * value });
+  const dataset: DatasetInput = {
+    ...datasetOf(
+      {
+        gap: allostericConstant(9054, 905),
+        siteClasses: [
+          {
+            id: 'haem',
+            sites: { value: 4 },
+            binding: [{ ligand: 'oxygen', inactive: inTorr(active / 0.014), active: inTorr(active) }],
+          },
+        ],
+      },
+      table.table_pO2_Torr.map((pressure, i) => ({
+        ligands: { oxygen: pressure },
+        activity: table.table_S_percent[i] / 100,
+        u: 0.005,
+      })),
+      { ligands: [{ id: 'oxygen', unit: 'Torr', concentration: 'free' }] },
+    ),
+  };
+  const measured = (pressure: number) => 1 / (1 + 23400 / (pressure ** 3 + 150 * pressure));
+
+  it('the equation gives the figures of the paper', () => {
+    for (const [pressure, S] of Object.entries(wanted.S))
+      expectClose(measured(Number(pressure)), Number(S), 1e-12, pressure, ZERO);
+    expectClose(
+      units.convertConcentration(Number(wanted.P50_Torr), 'Torr', 'kPa'),
+      Number(wanted.P50_kPa),
+      1e-12,
+    );
+  });
+  it('is told that it misses: rejected, with points off the curve where few haems are occupied', () => {
+    const series = assessOne(dataset);
+    expect(series.pValue).toBeLessThan(1e-6);
+    const off = series.points.filter(({ flag }) => flag === 'off-curve');
+    expect(off.length).toBeGreaterThan(0);
+    // Sites of the inactive state bind too: more is bound than active, at the foot of the curve.
+    for (const point of off) expect(point.residual).toBeGreaterThan(0);
+  });
+  it('while the same statements predict the binding itself to within 0.05', () => {
+    const model = buildSeriesModel(dataset, dataset.series[0]);
+    const state = createSiteState(model);
+    for (const pressure of [10, 20, 27, 40, 60, 100]) {
+      occupySites(model, Float64Array.of(pressure), 0, state);
+      const p = logistic(energyOf(model, state));
+      const bound = p * state.occupancyActive[0] + (1 - p) * state.occupancyInactive[0];
+      expect(Math.abs(bound - measured(pressure))).toBeLessThan(0.05);
+    }
   });
 });
 
@@ -294,5 +411,37 @@ describe('A28 tails behind the flags (standard normal, χ², Student; R and mpma
     expectClose(chiSquaredUpper(Number(wanted.chi2_95_df10), 10), 0.05, 1e-12, 'χ² 10', ZERO);
     expectClose(studentTwoSided(Number(wanted.t975_df4), 4), 0.05, 1e-12, 't 4', ZERO);
     expectClose(studentTwoSided(-Number(wanted.t995_df16), 16), 0.01, 1e-12, 't 16', ZERO);
+  });
+});
+
+describe('half activity of a complex that ligand inhibits (common practice: about K_I (e^(g/n) − 1) for K_I ≪ K_A)', () => {
+  const derivedAt = (gap: number, n: number, ratio = 1000) => {
+    const energy = { value: gap, unit: 'kT', orientation: 'inactive-minus-active' } as const;
+    const [derived] = assessOne(
+      datasetOf({ gap: energy, siteClasses: [siteClass(n, 1, ratio)] }, pointsAt(1)),
+    ).derived;
+    return { half: derived.halfActivity?.value ?? Number.NaN, ec50: derived.ec50?.value ?? Number.NaN };
+  };
+  const cases = [4, 6, 12, 18].flatMap((n) => [0.5, 1, 2, 4, 6].map((gap) => [n, gap] as const));
+
+  it.each(cases)('within 1 %% at a ratio of 1000: n = %s, g = %s', (n, gap) => {
+    expectClose(derivedAt(gap, n).half, Math.expm1(gap / n), 0.01, 'half activity', ZERO);
+  });
+  it('not at a ratio of 10, and not for one site', () => {
+    expect(derivedAt(6, 4, 10).half / Math.expm1(1.5)).toBeGreaterThan(1.1);
+    expect(derivedAt(6, 1).half / Math.expm1(6)).toBeGreaterThan(1.1);
+  });
+  it('EC50 departs from it at a small gap, where activity without ligand is well below 1', () => {
+    const departure = (gap: number) => derivedAt(gap, 6).ec50 / derivedAt(gap, 6).half - 1;
+    expect(departure(0.5)).toBeGreaterThan(0.5);
+    expect(departure(2)).toBeGreaterThan(0.05);
+    expect(departure(6)).toBeLessThan(0.01);
+  });
+  it('shifting the gap moves both', () => {
+    for (const gap of [1, 2, 4]) {
+      const [low, high] = [derivedAt(gap, 6), derivedAt(gap + 0.5, 6)];
+      expect(high.half / low.half).toBeGreaterThan(1.05);
+      expect(high.ec50 / low.ec50).toBeGreaterThan(1.05);
+    }
   });
 });

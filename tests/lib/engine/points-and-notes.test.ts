@@ -100,6 +100,52 @@ describe('notes', () => {
       expect.objectContaining({ code: 'depletion', points: [1] }),
     ]);
     expect(codes(dataset('free', 10))).toEqual([]);
-    expect(codes(dataset('total'))).toEqual([]);
+    expect(codes(dataset('total'))).toEqual(['protein-concentration-not-stated']);
+  });
+});
+
+describe('notes on scaling and width', () => {
+  const noted = (dataset: DatasetInput, code: string) =>
+    assessOne(dataset).notes.find((note) => note.code === code);
+  const scaled = (inactive: number, method: DatasetInput['normalisation']['method']): DatasetInput => ({
+    ...datasetOf(
+      { gap: allostericConstant(1 / 3), siteClasses: [siteClass(1, inactive, null)] },
+      pointsAt(0, 1),
+    ),
+    normalisation: { method },
+  });
+
+  it('normalisation: only where a series scaled to its own ends cannot reach 0 and 1', () => {
+    // p = 1/(1 + (1 + c/K)/3): 0.75 without ligand, 0.60 at c = K and 0.029 at c = 100 K
+    expect(noted(scaled(1, 'series-min-max'), 'normalisation')?.detail).toContain('from 0.60 to 0.75');
+    expect(noted(scaled(0.01, 'series-min-max'), 'normalisation')?.detail).toContain('from 0.03 to 0.75');
+    expect(noted(scaled(1, 'two-reference'), 'normalisation')).toBeUndefined();
+    const full = datasetOf(
+      { gap: allostericConstant(1 / 30), siteClasses: [siteClass(4, 1, null)] },
+      pointsAt(0, 100),
+    );
+    expect(noted({ ...full, normalisation: { method: 'series-min-max' } }, 'normalisation')).toBeUndefined();
+  });
+
+  it('uncertainties too wide: at least half of the points could hardly miss', () => {
+    const wide = (...us: number[]) =>
+      datasetOf(
+        { gap: allostericConstant(3), siteClasses: CLASSES },
+        us.map((u) => ({ ligands: {}, activity: 0.5, u })),
+      );
+    expect(noted(wide(0.3, 0.3, 0.05), 'uncertainty-too-wide')?.points).toEqual([0, 1]);
+    expect(noted(wide(0.3, 0.05, 0.05), 'uncertainty-too-wide')).toBeUndefined();
+    // A gap known to 2 kT leaves an expected activity of 0.25 ± 0.38.
+    const vague = datasetOf({ gap: allostericConstant(3, 6), siteClasses: CLASSES }, pointsAt(0));
+    expect(noted(vague, 'uncertainty-too-wide')?.points).toEqual([0]);
+  });
+
+  it('total ligand without a protein concentration: depletion cannot be judged', () => {
+    const dataset = (concentration: 'free' | 'total') =>
+      datasetOf({ gap: allostericConstant(3), siteClasses: CLASSES }, pointsAt(0, 1), {
+        ligands: [{ id: LIGAND, unit: 'uM', concentration }],
+      });
+    expect(noted(dataset('total'), 'protein-concentration-not-stated')?.detail).toContain(LIGAND);
+    expect(noted(dataset('free'), 'protein-concentration-not-stated')).toBeUndefined();
   });
 });

@@ -26,4 +26,11 @@ describe('by its address', () => {
     ])
       expect(policyOfAddress(url)).not.toContain('sandbox');
   });
+
+  it('the script that a worker starts with may load the rest of it, and nothing else may', () => {
+    const worker = policyOfAddress('/_next/static/chunks/turbopack-worker-1hrsq.js');
+    expect(worker).toMatch(/^default-src 'none'.*; script-src 'self'$/);
+    for (const url of ['/_next/static/chunks/1hrsq.js', '/check', '/turbopack-worker-1.js'])
+      expect(policyOfAddress(url)).not.toContain('script-src');
+  });
 });

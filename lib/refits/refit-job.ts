@@ -1,0 +1,30 @@
+/** A refit that another process began and did not end: it is begun anew from what was sent. */
+import { selectRefit, updateRefitAnswer } from '@/db/queries/refits';
+import type { Finish, JobHandler } from '@/lib/jobs/job-kinds';
+import { finishOf, keepingProgress } from './kept-refit';
+import { problemAnswer } from './refit-body';
+import { refitInPool } from './refit-pool';
+
+const nothing: Finish = async () => undefined;
+
+export const refitJob: JobHandler<'refit'> = {
+  mostAttempts: 3,
+  run: async ({ refitId }, signal) => {
+    const refit = await selectRefit(refitId, Date.now());
+    // Past its time, or answered: nobody waits for it.
+    if (refit === null || refit.body === null) return nothing;
+    let progress = refit.progress;
+    const computing = refitInPool(
+      Uint8Array.from(refit.body),
+      (now) => {
+        progress = Math.max(progress, now);
+      },
+      signal,
+    );
+    return finishOf(refit, await keepingProgress(refitId, () => progress, computing));
+  },
+  giveUp: ({ refitId }) => {
+    const { status, body } = problemAnswer({ code: 'unexpected' });
+    return async (tx) => updateRefitAnswer(tx, refitId, { status, body });
+  },
+};
