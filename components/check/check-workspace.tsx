@@ -46,6 +46,8 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
   const [outcome, setOutcome] = useState<SourceOutcome | null>(null);
   const [editing, setEditing] = useState(true);
   const [data, setData] = useState<PlotData | null>(null);
+  /** what `data` was made from */
+  const [assessed, setAssessed] = useState<Job | null>(null);
   const [look, setLook] = useState<Look | null>(null);
   /** what was stated otherwise from a reason, and what stood before */
   const [restated, setRestated] = useState<Restated | null>(null);
@@ -61,6 +63,7 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
       setOutcome(found);
       if (found.kind !== 'assessed') return setEditing(true);
       setData(found.data);
+      setAssessed(job);
       setLook(openingLook(found.data, job.example));
       setEditing(false);
       window.scrollTo({ top: 0 });
@@ -98,9 +101,17 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
     setExample(job.example);
     mutate(job);
   };
+  // A source that was edited since would lose what was typed.
+  const isCurrent =
+    assessed?.source === source && (kindOf(source) === 'document' || assessed.draft === draft);
+  const latest = useRef(source);
+  useEffect(() => {
+    latest.current = source;
+  });
   const state = async (reading: StatedReading) => {
     if (data === null || isPending) return;
     const { stateInSource } = await import('./state-source');
+    if (latest.current !== source) return;
     const { becameDocument, ...next } = stateInSource(source, draft, data.document, reading);
     setRestated({ reading, becameDocument, before: { source, draft, example } });
     check({ ...next, example: null });
@@ -152,7 +163,7 @@ export function CheckWorkspace({ labs = [] }: CheckWorkspaceProps) {
         data={data}
         look={look}
         onLook={setLook}
-        onState={(reading) => void state(reading)}
+        onState={isCurrent ? (reading) => void state(reading) : undefined}
         stated={restated === null ? null : <RestatedBand restated={restated} onUndo={undo} />}
         head={
           <DatasetHead data={data} invented={example !== null} onEdit={() => setEditing(true)} keep={keep} />

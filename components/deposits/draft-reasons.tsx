@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { openingWindow } from '@/components/plots/energy-window';
 import { type PlotData, pointsOf } from '@/components/plots/plot-data';
 import { StatedBand } from '@/components/reasons/stated-band';
@@ -34,8 +34,14 @@ export function useDraftReasons(data: PlotData | null, draft: Draft, isStale: bo
   const trials = useTrial({ stated: data, window });
   const [last, setLast] = useState<Restated | null>(null);
   const restated = last !== null && last.value === content.value && edit === null ? last : null;
+  const latest = useRef(content);
+  useEffect(() => {
+    latest.current = content;
+  });
   const state = async (reading: StatedReading) => {
     const { stateReading } = await import('@/lib/documents/state-reading');
+    // What was typed while the code was on its way is not overwritten.
+    if (latest.current !== content) return;
     const document = content.value as unknown as DatasetDocument;
     const value = stateReading(document, reading.series, reading.misreading) as unknown as JsonObject;
     trials.stop();

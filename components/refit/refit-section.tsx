@@ -22,6 +22,10 @@ interface RefitSectionProps {
 /** The refit, folded until it is asked for. */
 export function RefitSection({ data, trials, wholeDocument }: RefitSectionProps) {
   const [isOpen, setOpen] = useState(false);
+  // The summary is the very object of the answer. What was fitted to another document is put away with its panel.
+  const of = data.assessment.summary;
+  const [basis, setBasis] = useState({ of, number: 0 });
+  if (basis.of !== of) setBasis({ of, number: basis.number + 1 });
   return (
     <section aria-labelledby="refit" className="no-print border-hairline border-t py-8">
       <h2 id="refit" className="head text-xl">
@@ -39,6 +43,7 @@ export function RefitSection({ data, trials, wholeDocument }: RefitSectionProps)
       <div id="refit-panel" hidden={!isOpen}>
         {isOpen ? (
           <RefitPanel
+            key={basis.number}
             data={data}
             trials={trials}
             wholeDocument={wholeDocument ?? (() => Promise.resolve(data.document))}

@@ -134,6 +134,19 @@ describeInBrowser('why a series misses', ({ newPage, url }) => {
     await page.close();
   });
 
+  it('does not state anything over what was typed since', async () => {
+    const page = await open(reversedDocument());
+    await page.getByRole('button', { name: 'Change the data' }).click();
+    const edited = `${await editorIn(page).inputValue()}\n`;
+    await editorIn(page).fill(edited);
+    await page.getByRole('button', { name: 'Back to the last assessment' }).click();
+    await tryIn(page).waitFor();
+    expect(await page.getByRole('button', { name: /^State it so/ }).count()).toBe(0);
+    await page.getByRole('button', { name: 'Change the data' }).click();
+    expect(await editorIn(page).inputValue()).toBe(edited);
+    await page.close();
+  });
+
   it('shows nothing where nothing misses', async () => {
     const page = await newPage();
     await page.goto(url('/check?example=collapse'));
@@ -188,6 +201,11 @@ describeInBrowser('a refit', ({ newPage, url }) => {
       .first()
       .waitFor();
     expect(await canvasIn(page).count()).toBe(1);
+
+    // What was fitted to another document goes with it.
+    await page.getByRole('button', { name: /^State it so/ }).click();
+    await page.getByText('Stated so:').waitFor();
+    await table.waitFor({ state: 'detached' });
     expect(complaints).toEqual([]);
     await page.close();
   });
