@@ -15,7 +15,8 @@ export function MonteCarloSection() {
       <p>
         At most 100 points of a dataset are checked, those at which the curvature is largest. Where the two
         disagree by more than 5 % of <S sub="p">u</S>, a note says so: there the linear figure, and the{' '}
-        <S>z</S> that rests on it, should not be trusted to the last digit.
+        <S>z</S> that rests on it, should not be trusted to the last digit. Nothing is said where{' '}
+        <S sub="p">u</S> is below 0.001 either way, which matters nowhere beside the model floor of 0.01.
       </p>
     </MethodsSection>
   );

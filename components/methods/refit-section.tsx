@@ -20,9 +20,9 @@ export function RefitMethodsSection() {
       <p>
         A value is <em>not determined by these data</em> where it belongs to a direction in which the scaled
         normal matrix is worse conditioned than <InlineEquation tex="10^8" />, where its standard error is
-        above 1 in <InlineEquation tex="\ln K" /> or <InlineEquation tex="\ln n" /> or above 1 kT in a gap, or
-        where it ended at a bound of what a document may state. Points of one ligand above or below the bend
-        of the curve, for instance, tell nothing of <S label="A">K</S>.
+        above 1 in <InlineEquation tex="\ln K" /> or <InlineEquation tex="\ln n" />, or where it ended at a
+        bound of what a document may state. Points of one ligand above or below the bend of the curve, for
+        instance, tell nothing of <S label="A">K</S>.
       </p>
       <p>A refit is a suggestion. Published parameters are those that a laboratory states.</p>
     </MethodsSection>

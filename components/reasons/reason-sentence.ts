@@ -4,7 +4,7 @@
  */
 import type { Reading } from '@/components/engine/reading';
 import type { PlotData, PlotSeries } from '@/components/plots/plot-data';
-import { formatScore } from '@/components/ui/format-quantity';
+import { formatFixed, formatScore } from '@/components/ui/format-quantity';
 import type { ConventionFinding, QStatistic } from '@/lib/engine/assessment';
 import { readingWords } from './reading-words';
 import { namedAlternative, shapeWords } from './shape-words';
@@ -37,6 +37,8 @@ export interface WhyItMisses {
 }
 
 const NOTHING_EXPLAINS = 'No single misreading and no offset, slope, ceiling, floor or stock explains it.';
+/** RMS z beyond which a reading improves a series without explaining it. */
+const STILL_MISSES = 1.5;
 const NO_TEST = 'Its parameters were fitted to these very points, so it is no test of the curve.';
 
 /** The reasons of a dataset: none where nothing misses. */
@@ -44,9 +46,10 @@ export function whyItMisses(data: PlotData): WhyItMisses {
   const shared = data.series.length > 1 ? (data.assessment.summary.conventions ?? []) : [];
   const ids = data.series.map(({ stated }) => stated.id);
   return {
-    dataset: shared.map((finding) =>
-      conventionReason(data, data.series, finding, data.assessment.summary, ids),
-    ),
+    dataset: [
+      ...shared.map((finding) => conventionReason(data, data.series, finding, data.assessment.summary, ids)),
+      ...(shared.length === 0 ? commonOffset(data) : []),
+    ],
     series: data.series.flatMap((series, index) => {
       const reasons = reasonsOf(data, series, shared);
       if (reasons.length === 0) return [];
@@ -54,6 +57,27 @@ export function whyItMisses(data: PlotData): WhyItMisses {
       return [{ index, label, colour, rmsZ: assessed.rmsZ, reasons }];
     }),
   };
+}
+
+/** The same offset in every series that is a test points to a cause that they share. */
+function commonOffset({ series }: PlotData): Reason[] {
+  const tests = series.filter(({ assessed }) => assessed.origin !== 'fitted-here');
+  const offsets = tests.flatMap(({ assessed: { shape } }) => {
+    const best = shape ? namedAlternative(shape) : null;
+    return best?.kind === 'offset' ? [best.estimates[0].value] : [];
+  });
+  const [low, high] = [Math.min(...offsets), Math.max(...offsets)];
+  if (tests.length < 2 || offsets.length < tests.length || low * high < 0) return [];
+  const range = `${formatFixed(low, 2)} to ${formatFixed(high, 2)}\u00a0kT`;
+  return [
+    {
+      key: 'common offset',
+      text: `Each would lie on the curve with an offset of the same sign, ${range}: look for a cause that they share.`,
+      strong: range,
+      trial: null,
+      short: null,
+    },
+  ];
 }
 
 /** Why each series misses, in a few words for its row; null where it does not, or nothing explains it. */
@@ -90,7 +114,8 @@ function reasonsOf(data: PlotData, series: PlotSeries, shared: readonly Conventi
     });
   }
   if (reasons.length === 0) return [];
-  return [...reasons, ...normalisationReasons(series), ...circularityReasons(series)];
+  // A scaling that the laboratory states itself is likelier than whatever else happens to fit.
+  return [...normalisationReasons(series), ...reasons, ...circularityReasons(series)];
 }
 
 function keyOf({ rmsZ: _, deltaSumZ2: __, ...misreading }: ConventionFinding): string {
@@ -112,7 +137,7 @@ function conventionReason(
   );
   return {
     key: `${ids.join(' ')} ${keyOf(finding)}`,
-    text: `${words.doing} brings RMS z from ${formatScore(asStated.rmsZ)} to ${formatScore(after)}.`,
+    text: `${words.doing} brings RMS z from ${formatScore(asStated.rmsZ)} to ${formatScore(after)}${after > STILL_MISSES ? ': nearer, but not onto the curve' : ''}.`,
     strong: words.strong,
     trial: { reading: { kind: 'convention', series: ids, misreading }, noun: words.noun },
     short: words.short,

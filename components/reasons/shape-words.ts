@@ -20,7 +20,7 @@ export function shapeWords(shape: Shape): (ReadingWords & { more: string }) | nu
     }
     case 'slope': {
       const strong = `${written('slope')} times`;
-      return words(`Energies ${strong} those stated (a slope)`, strong, `slope ${brief('slope')}`);
+      return words(`A response ${strong} as steep as stated (a slope)`, strong, `slope ${brief('slope')}`);
     }
     case 'ceiling': {
       const strong = written('ceiling');
@@ -37,7 +37,7 @@ export function shapeWords(shape: Shape): (ReadingWords & { more: string }) | nu
     case 'offset+slope': {
       const strong = written('offset', 'kT');
       return words(
-        `An offset of ${strong} together with energies ${written('slope')} times those stated`,
+        `An offset of ${strong} together with a response ${written('slope')} times as steep as stated`,
         strong,
         `offset ${brief('offset')} kT, slope ${brief('slope')}`,
         allowance(shape),
@@ -73,7 +73,7 @@ function words(doing: string, strong: string, brief: string, more = '') {
 /** What the offset is to be compared with. */
 function allowance({ allowedByStatements }: Shape): string {
   if (allowedByStatements < 1e-4) return 'the statements carry no uncertainty that would allow one';
-  return `the stated uncertainties alone would allow about ${twoDigits(allowedByStatements)}\u00a0kT`;
+  return `the stated uncertainties alone explain about ${twoDigits(allowedByStatements)}\u00a0kT (one standard uncertainty)`;
 }
 
 function twoDigits(value: number): string {

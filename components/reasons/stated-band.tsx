@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react';
+import { type ReactNode, useEffect, useRef } from 'react';
 import { Button } from '@/components/ui/button';
 
 interface StatedBandProps {
@@ -12,6 +12,9 @@ interface StatedBandProps {
 
 /** What was just stated otherwise, and the way back. */
 export function StatedBand({ noun, label, children, onUndo }: StatedBandProps) {
+  const undo = useRef<HTMLButtonElement>(null);
+  // The button that was pressed is gone: without this the focus would be lost.
+  useEffect(() => undo.current?.focus({ preventScroll: true }), []);
   return (
     <p
       role="status"
@@ -20,7 +23,7 @@ export function StatedBand({ noun, label, children, onUndo }: StatedBandProps) {
       <span>
         <span className="font-semibold">Stated so:</span> {label ?? 'all series'}, with {noun}. {children}
       </span>
-      <Button className="text-sm" onClick={onUndo}>
+      <Button ref={undo} className="text-sm" onClick={onUndo}>
         Undo
       </Button>
     </p>

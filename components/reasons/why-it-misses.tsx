@@ -39,7 +39,7 @@ interface WhyItMissesProps {
 export function WhyItMisses({ stated, trials, disabled = false, onState, children }: WhyItMissesProps) {
   const [isWhole, setWhole] = useState(false);
   const why = whyItMisses(stated);
-  if (why.dataset.length === 0 && why.series.length === 0) return null;
+  if (why.dataset.length === 0 && why.series.length === 0) return <LonePoints stated={stated} />;
   const fold = why.series.length > SHOWN_AT_FIRST + 1 && !isWhole;
   const shown = fold ? why.series.slice(0, SHOWN_AT_FIRST) : why.series;
   const more = why.series.length - shown.length;
@@ -69,6 +69,25 @@ export function WhyItMisses({ stated, trials, disabled = false, onState, childre
           {formatCount(more)} more series miss
         </Button>
       ) : null}
+    </section>
+  );
+}
+
+/** Where points miss and no series does. */
+function LonePoints({ stated: { assessment } }: { stated: PlotData }) {
+  const { offCurve, conventions } = assessment.summary;
+  // An assessment that an older engine recorded did not look for reasons.
+  if (offCurve === 0 || !conventions) return null;
+  return (
+    <section aria-labelledby="why-it-misses" className="mt-5 border-ink border-t pt-3">
+      <h2 id="why-it-misses" className="font-semibold">
+        Why it misses
+      </h2>
+      <p className="mt-1 text-pretty text-sm">
+        {offCurve === 1 ? 'One point misses' : `${formatCount(offCurve)} points miss`}; no series does as a
+        whole, and no one reading or shape explains it. Single readings may have gone wrong, or their
+        uncertainties may be stated too small.
+      </p>
     </section>
   );
 }

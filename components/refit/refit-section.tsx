@@ -37,7 +37,7 @@ export function RefitSection({ data, trials, wholeDocument }: RefitSectionProps)
       </p>
       <p className="mt-2">
         <Button aria-expanded={isOpen} aria-controls="refit-panel" onClick={() => setOpen(!isOpen)}>
-          {isOpen ? 'Put the refit away' : 'Choose what to free'}
+          {isOpen ? 'Close the refit' : 'Choose what to free'}
         </Button>
       </p>
       <div id="refit-panel" hidden={!isOpen}>

@@ -36,7 +36,7 @@ export function correctSeries(count: number, replicates: number, seed: number) {
     points += scored.table.count;
     beyond += scored.table.pValue.filter((p) => p < POLICY.warningBelow).length;
     pValues.push(seriesQ(scored).pValue ?? Number.NaN);
-    if (fitShape(dataset, dataset.series[0], scored).best !== 'none') named++;
+    if (fitShape(dataset, dataset.series[0], scored).shape.best !== 'none') named++;
   }
   return { beyondWarning: beyond / points, pValues, named: named / count };
 }
@@ -53,7 +53,7 @@ export function plantedShape(kind: ShapeKind, bend: Bend, count: number, seed: n
   let [fitted, chosen] = [0, 0];
   for (let i = 0; i < count; i++) {
     const { dataset, scored } = simulate(random, { bend });
-    const { best, alternatives } = fitShape(dataset, dataset.series[0], scored);
+    const { best, alternatives } = fitShape(dataset, dataset.series[0], scored).shape;
     if (best === kind) chosen++;
     const found = alternatives.find((one) => one.kind === kind);
     if (!found) continue;

@@ -117,12 +117,12 @@ describe('a misread convention, as a sentence', () => {
 describe('a shape, as a sentence', () => {
   it('has its estimate to the digits that its uncertainty justifies, and what the statements would allow', () => {
     expect(sentencesOf(shapeOf('offset', ['offset', -1.2034, 0.081]))).toEqual([
-      'An offset of −1.203 ± 0.081 kT would bring it nearest to the curve; the stated uncertainties alone would allow about 0.19 kT.',
+      'An offset of −1.203 ± 0.081 kT would bring it nearest to the curve; the stated uncertainties alone explain about 0.19 kT (one standard uncertainty).',
     ]);
   });
 
   it.each<[ShapeKind, Parameters<typeof shapeOf>[1][], string]>([
-    ['slope', [['slope', 0.72, 0.043]], 'Energies 0.720 ± 0.043 times those stated (a slope)'],
+    ['slope', [['slope', 0.72, 0.043]], 'A response 0.720 ± 0.043 times as steep as stated (a slope)'],
     ['ceiling', [['ceiling', 0.82, 0.012]], 'A ceiling at 0.820 ± 0.012, in place of 1,'],
     ['floor', [['floor', -0.05, 0.011]], 'A floor at −0.050 ± 0.011, in place of 0,'],
     ['stock', [['stock', 1.92, 0.13]], 'A stock 1.92 ± 0.13 times as concentrated as stated'],
@@ -148,7 +148,7 @@ describe('a shape, as a sentence', () => {
       }),
     ).toEqual([
       'Reading the gap as active − inactive brings RMS z from 14.2 to 0.90.',
-      'Or: an offset of −4.80 ± 0.10 kT would bring it nearest to the curve; the stated uncertainties alone would allow about 0.19 kT.',
+      'Or: an offset of −4.80 ± 0.10 kT would bring it nearest to the curve; the stated uncertainties alone explain about 0.19 kT (one standard uncertainty).',
     ]);
   });
 });

@@ -38,7 +38,9 @@ it('keeps W·Wᵀ with no more columns than independent directions', () => {
         return sum;
       });
       const before = rows.slice();
-      const { factor, rank } = narrowFactor(rows, m, columns);
+      const narrowed = narrowFactor(rows, m, columns);
+      if (narrowed === null) throw new Error('no limit was given');
+      const { factor, rank } = narrowed;
       expect(rows).toEqual(before);
       expect(factor.length).toBe(m * rank);
       expect(rank).toBeLessThanOrEqual(Math.min(m, columns));
@@ -54,6 +56,13 @@ it('keeps W·Wᵀ with no more columns than independent directions', () => {
 it('finds that columns which are combinations of others add nothing', () => {
   // The third column is the sum of the first two, the fourth is nothing.
   const rows = Float64Array.from([1, 2, 3, 0, 4, -1, 3, 0, 0.5, 7, 7.5, 0, 2, 2, 4, 0]);
-  expect(narrowFactor(rows, 4, 4).rank).toBe(2);
-  expect(narrowFactor(new Float64Array(6), 3, 2).rank).toBe(0);
+  expect(narrowFactor(rows, 4, 4)?.rank).toBe(2);
+  expect(narrowFactor(new Float64Array(6), 3, 2)?.rank).toBe(0);
+});
+
+it('says where more columns are needed than allowed, short rows apart', () => {
+  const rows = Float64Array.from([3, 0, 0, 0, 2, 0, 0, 0, 1e-6]);
+  expect(narrowFactor(rows, 3, 3)?.rank).toBe(3);
+  expect(narrowFactor(rows, 3, 3, { mostColumns: 2 })).toBeNull();
+  expect(narrowFactor(rows, 3, 3, { mostColumns: 2, negligible: 1e-5 })?.rank).toBe(2);
 });

@@ -188,7 +188,9 @@ describe('what the data do not determine', () => {
       constant('active'),
     ]);
     expect(found.estimates.map(({ determined }) => determined)).toEqual([true, true, false]);
-    expect(found.estimates[2].u).toBeNull();
+    // How little they say of it is a number all the same: above 1 in ln K.
+    const { u, value } = found.estimates[2];
+    expect((u ?? 0) / value).toBeGreaterThan(1);
     expect(found.estimates[1].u).toBeGreaterThan(0);
   });
 
@@ -203,6 +205,39 @@ describe('what the data do not determine', () => {
       constant('inactive'),
     ]);
     expect(found.estimates.map(({ determined }) => determined)).toEqual([false, false, true]);
+  });
+
+  it('is never said of a gap for its standard error alone, only for what cannot be told apart', () => {
+    const series = measured({ ...TRUTH, gap: 6 }, { ...TRUTH, gap: 6 }, null);
+    const open = series.points.slice(0, 2).map((point) => ({ ...point, activity: 0.99, u: 0.2 }));
+    const [gap] = refit(datasetWith({ ...series, points: open }), [GAP]).estimates;
+    expect(gap.u).toBeGreaterThan(1);
+    expect(gap.determined).toBe(true);
+  });
+
+  it('is said, and that nothing converged, where the points do not respond at the start', () => {
+    const series = measured(TRUTH, { ...TRUTH, gap: 190, inactive: 1e6 }, null);
+    const found = refit(datasetWith(series), [GAP, constant('inactive')]);
+    expect(found.chiSquared).toBeGreaterThan(1000);
+    expect(found.converged).toBe(false);
+    expect(found.estimates.map(({ determined }) => determined)).toEqual([false, false]);
+  });
+
+  it('is said where χ² falls no further while a value runs away', () => {
+    // Noise makes the site count of a nearly exponential curve run to its bound.
+    let steps = 0;
+    for (let seed = 20; seed < 32; seed++) {
+      const series = measured({ gap: 0.2, sites: 1, inactive: 400, active: 1e6 }, TRUTH, seededRandom(seed));
+      const found = refit(datasetWith(series), [
+        GAP,
+        constant('inactive'),
+        constant('active'),
+        { parameter: 'sites', siteClass: 'main', share: 'series' },
+      ]);
+      expect(found.converged).toBe(true);
+      steps = Math.max(steps, found.iterations);
+    }
+    expect(steps).toBeLessThan(500);
   });
 
   it('is said where there are more values than points, and no reduced χ² then', () => {
@@ -267,7 +302,7 @@ describe('any dataset', () => {
             expect(Math.abs(value)).toBeLessThanOrEqual(Math.max(200, Math.abs(stated)));
           if (parameter === 'sites') expect(value).toBeLessThanOrEqual(1000 * (1 + 1e-12));
           if (parameter === 'inactive' || parameter === 'active') expect(value).toBeGreaterThan(0);
-          expect(determined).toBe(u !== null);
+          if (determined) expect(u).not.toBeNull();
           if (u !== null) expect(u).toBeGreaterThan(0);
         }
         found.correlations.forEach((row, j) => {

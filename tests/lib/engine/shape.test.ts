@@ -31,7 +31,7 @@ function scoredOf(dataset: DatasetInput, series = dataset.series[0]): ScoredSeri
 }
 
 function shapeOf(dataset: DatasetInput, series = dataset.series[0]): Shape {
-  return fitShape(dataset, series, scoredOf(dataset, series));
+  return fitShape(dataset, series, scoredOf(dataset, series)).shape;
 }
 
 function pick(shape: Shape, kind: ShapeKind): ShapeAlternative {

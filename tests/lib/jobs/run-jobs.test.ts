@@ -1,13 +1,15 @@
 /** Jobs on a real database: begun once, retried with growing pauses, given up, taken over, handed back. */
+import { eq } from 'drizzle-orm';
 import { afterEach, describe, expect, it, vi } from 'vitest';
 import { readDatabase, write } from '@/db/client';
 import { claimDueJob, deleteJob, extendLease, hasDueJob } from '@/db/queries/jobs';
 import { jobs } from '@/db/tables/jobs';
 import { carryOut } from '@/lib/jobs/carry-out';
 import { enqueueJob, enqueueStartedJob } from '@/lib/jobs/enqueue-job';
-import type { JobHandler } from '@/lib/jobs/job-kinds';
+import { forgetGivenUpJobs } from '@/lib/jobs/forget-given-up';
+import { type JobHandler, NoRoom } from '@/lib/jobs/job-kinds';
 import { stopJobsUnderWay, stopRemovedJob } from '@/lib/jobs/jobs-under-way';
-import { HEARTBEAT_MS, LEASE_MS, pauseAfter } from '@/lib/jobs/lease';
+import { GIVEN_UP_KEPT_MS, HEARTBEAT_MS, LEASE_MS, NO_ROOM_PAUSE_MS, pauseAfter } from '@/lib/jobs/lease';
 import { runJobs } from '@/lib/jobs/run-jobs';
 import { temporaryDatabase } from '@/tests/support/temporary-database';
 
@@ -18,10 +20,11 @@ afterEach(async () => {
   });
 });
 
+const KINDS = ['refit'];
 const rows = async () => (await readDatabase()).select().from(jobs);
 const enqueue = (refitId: string, runAt?: number) =>
   write('acknowledged', (tx) => enqueueJob(tx, 'refit', { refitId }, runAt));
-const claim = (nowMs = Date.now(), token = 'token') => claimDueJob(token, nowMs, nowMs + LEASE_MS);
+const claim = (nowMs = Date.now(), token = 'token') => claimDueJob(KINDS, token, nowMs, nowMs + LEASE_MS);
 const never: JobHandler['run'] = (_, signal) =>
   new Promise((_, reject) => {
     signal.addEventListener('abort', () => reject(new Error(String(signal.reason))));
@@ -41,9 +44,9 @@ describe('a job', () => {
       throw new Error('what it follows failed');
     });
     await expect(failing).rejects.toThrow('what it follows failed');
-    expect(await hasDueJob(Date.now())).toBe(false);
+    expect(await hasDueJob(KINDS, Date.now())).toBe(false);
     await enqueue('b');
-    expect(await hasDueJob(Date.now())).toBe(true);
+    expect(await hasDueJob(KINDS, Date.now())).toBe(true);
   });
 
   it('is begun when its time has come, the one that has waited longest first', async () => {
@@ -180,6 +183,79 @@ describe('a job', () => {
     await working;
     expect((await rows())[0]).toMatchObject({ attempts: 0, leaseToken: null, lastError: null });
     expect(await claim()).not.toBeNull();
+  });
+
+  it('that finds no room is tried again soon, and the attempt does not count', async () => {
+    await enqueue('a');
+    const full: JobHandler = {
+      mostAttempts: 1,
+      run: async () => {
+        throw new NoRoom('the queue is full');
+      },
+    };
+    await attempt(full);
+    expect((await rows())[0]).toMatchObject({ attempts: 0, leaseToken: null, givenUpAt: null });
+    expect(await claim()).toBeNull();
+    expect(await claim(Date.now() + NO_ROOM_PAUSE_MS)).not.toBeNull();
+  });
+
+  it('of a kind that a process does not know is left to others', async () => {
+    await write('acknowledged', (tx) => enqueueJob(tx, 'letter' as 'refit', { refitId: 'a' }));
+    expect(await claim()).toBeNull();
+    expect(await claimDueJob(['letter'], 'token', Date.now(), Date.now() + LEASE_MS)).not.toBeNull();
+  });
+
+  it('that was given up is removed after a month', async () => {
+    await enqueue('young');
+    const old = await enqueue('old');
+    const aMonthAgo = Date.now() - GIVEN_UP_KEPT_MS;
+    await write('acknowledged', async (tx) => {
+      await tx.update(jobs).set({ givenUpAt: aMonthAgo + 60_000 });
+      await tx
+        .update(jobs)
+        .set({ givenUpAt: aMonthAgo - 1 })
+        .where(eq(jobs.id, old));
+    });
+    await enqueue('waiting');
+    await forgetGivenUpJobs();
+    expect((await rows()).map(({ payload }) => JSON.parse(payload).refitId).sort()).toEqual([
+      'waiting',
+      'young',
+    ]);
+  });
+
+  it('tells its handler of every sign of life', { timeout: 4 * HEARTBEAT_MS }, async () => {
+    await enqueue('a');
+    const onBeat = vi.fn(async (): Promise<void> => undefined);
+    let beaten: () => void = () => undefined;
+    const first = new Promise<void>((resolve) => {
+      beaten = resolve;
+    });
+    onBeat.mockImplementation(async () => beaten());
+    await attempt({
+      mostAttempts: 3,
+      onBeat,
+      run: async () => {
+        await first;
+        return async () => undefined;
+      },
+    });
+    expect(onBeat).toHaveBeenCalledWith({ refitId: 'a' });
+  });
+
+  it('is begun however much work of calls is under way', async () => {
+    const working: Promise<void>[] = [];
+    for (let i = 0; i < 6; i++) {
+      const held = await write('acknowledged', (tx) => enqueueStartedJob(tx, 'refit', { refitId: 'call' }));
+      const handler: JobHandler = { mostAttempts: 3, run: never };
+      working.push(carryOut(held, handler, (signal) => never({ refitId: 'call' }, signal)));
+    }
+    await enqueue('waiting');
+    const run = vi.fn(async () => async () => undefined);
+    const runner = runJobs({ refit: { mostAttempts: 3, run } });
+    await vi.waitFor(() => expect(run).toHaveBeenCalledOnce(), { timeout: 5_000 });
+    await runner.stop();
+    await Promise.all(working);
   });
 
   it('may be under way already when it is added', async () => {

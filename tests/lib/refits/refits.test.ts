@@ -10,6 +10,7 @@ import { JOB_HANDLERS } from '@/lib/jobs/handlers';
 import { stopJobsUnderWay } from '@/lib/jobs/jobs-under-way';
 import { runJobs } from '@/lib/jobs/run-jobs';
 import { cancelRefit } from '@/lib/refits/cancel-refit';
+import { forgetExpiredRefits } from '@/lib/refits/forget-refits';
 import { loadRefit } from '@/lib/refits/load-refit';
 import { closeRefitPool, refitInPool } from '@/lib/refits/refit-pool';
 import { type RefitOutcome, startRefit } from '@/lib/refits/start-refit';
@@ -100,11 +101,16 @@ describe('a refit', { timeout: 90_000 }, () => {
     expect(await call(quickRefit())).toMatchObject({ kind: 'answered', status: 200 });
   });
 
-  it('is gone after an hour, and with the next one from the database', async () => {
-    const [row] = await (await readDatabase()).select().from(refits);
+  it('is gone after an hour, and from the database by the next round of chores', async () => {
+    const database = await readDatabase();
+    const [row] = await database.select().from(refits);
+    await forgetExpiredRefits();
+    expect(await database.select().from(refits)).toHaveLength(1);
     vi.useFakeTimers({ now: row.expiresAt, toFake: ['Date'] });
     try {
       expect(await load(row.id)).toMatchObject({ ok: false, failure: { code: 'not-found' } });
+      await forgetExpiredRefits();
+      expect(await database.select().from(refits)).toEqual([]);
     } finally {
       vi.useRealTimers();
     }
@@ -133,6 +139,21 @@ describe('a refit', { timeout: 90_000 }, () => {
     expect(taken).toEqual(decoded(direct.body));
   });
 
+  it('keeps its place as long as it gives signs of life', async () => {
+    const id = await begun();
+    const [before] = await leases();
+    vi.useFakeTimers({ now: Date.now() + 100_000, toFake: ['Date'] });
+    try {
+      await JOB_HANDLERS.refit.onBeat?.({ refitId: id });
+    } finally {
+      vi.useRealTimers();
+    }
+    const [after] = await leases();
+    expect(after.id).toBe(before.id);
+    expect(after.expiresAt).toBeGreaterThanOrEqual(before.expiresAt + 90_000);
+    await cancelRefit({ actor: VISITOR, id });
+  });
+
   it('that ends the process each time is given up with a problem', async () => {
     const id = await begun();
     await stopJobsUnderWay();
@@ -145,7 +166,9 @@ describe('a refit', { timeout: 90_000 }, () => {
       { timeout: 20_000 },
     );
     await runner.stop();
-    expect(await claimDueJob('x', Date.now() + 1e9, Date.now() + 2e9)).toBeNull();
+    // Its caller may ask for another.
+    expect(await leases()).toEqual([]);
+    expect(await claimDueJob(['refit'], 'x', Date.now() + 1e9, Date.now() + 2e9)).toBeNull();
   });
 
   it('stops where its caller goes away while waiting', async () => {
