@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { redirect } from 'next/navigation';
 import { DepositList } from '@/components/deposits/deposit-list';
 import { NewDraft } from '@/components/deposits/new-draft';
 import { actorOfPage } from '@/lib/auth/current-actor';
@@ -23,6 +24,8 @@ export default async function DepositsPage({ searchParams }: DepositsPageProps) 
   const actor = await actorOfPage();
   const place = typeof cursor === 'string' ? cursor : undefined;
   const listed = await listDepositsWithCounts({ actor, state, cursor: place });
+  // A place in the list that is none (any more): the list from its beginning.
+  if (!listed.ok && listed.failure.code === 'bad-parameter') redirect('/deposits');
   if (!listed.ok) return turnAway(listed.failure, '/deposits');
   const nameOf = await systemNames(actor);
   const labs = actor.kind === 'person' ? actor.memberships : [];

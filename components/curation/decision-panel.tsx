@@ -1,11 +1,11 @@
 'use client';
 
-import { useRef, useState } from 'react';
-import { newKey } from '@/components/deposits/call-api';
+import { useState } from 'react';
 import { type Decision, decideOn } from '@/components/deposits/deposit-calls';
 import { ProblemNotice } from '@/components/deposits/problem-notice';
 import { dayWords } from '@/components/deposits/publication-words';
 import { useCall } from '@/components/deposits/use-call';
+import { useCallKey } from '@/components/deposits/use-call-key';
 import { Button } from '@/components/ui/button';
 import { Disclosure } from '@/components/ui/disclosure';
 import { CONTROL_STYLE, Field } from '@/components/ui/field';
@@ -30,15 +30,13 @@ export function DecisionPanel({ id, revision }: DecisionPanelProps) {
   const [letter, setLetter] = useState('');
   const [missing, setMissing] = useState<string>();
   const [later, setLater] = useState<LaterDay>({ day: '', timeZone: 'UTC' });
-  const key = useRef(newKey());
+  const key = useCallKey();
   const { mutate, isPending, data, error, variables } = useCall({
     mutationFn: (kind: Kind) => {
       const publication = kind === 'accepted' && later.day !== '' ? later : undefined;
-      return decideOn(id, { kind, letter, revision, publication }, key.current);
+      return decideOn(id, { kind, letter, revision, publication }, key.current());
     },
-    onError: () => {
-      key.current = newKey();
-    },
+    onError: key.after,
   });
   if (data) return <Decided deposit={data} />;
   const answer = (kind: keyof typeof MISSING) => {

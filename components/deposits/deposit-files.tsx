@@ -1,7 +1,7 @@
 'use client';
 
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useRef, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { formatBytes } from '@/components/ui/format-bytes';
 import type { FileAnswer } from '@/schemas/file';
@@ -9,6 +9,7 @@ import { newKey } from './call-api';
 import { listFiles, removeFile, uploadFile } from './deposit-calls';
 import { ProblemNotice } from './problem-notice';
 import { useCall } from './use-call';
+import { isFinal } from './use-call-key';
 
 /** Most bytes of one file. */
 const MOST_FILE_BYTES = 100 * 1024 * 1024;
@@ -86,9 +87,19 @@ function FileRow({ file: { name, size, sha256, links }, busy, onRemove }: FileRo
 function Upload({ id, onUploaded }: { id: string; onUploaded: () => Promise<void> }) {
   const [share, setShare] = useState(0);
   const [tooLarge, setTooLarge] = useState<string | null>(null);
+  /** what is being sent, until the server has it or has refused it for good; chosen again it is the same */
+  const sent = useRef<{ file: string; key: string }>(null);
+  const keyOf = ({ name, size, lastModified }: File): string => {
+    const file = `${name} ${size} ${lastModified}`;
+    if (sent.current?.file !== file) sent.current = { file, key: newKey() };
+    return sent.current.key;
+  };
   const { mutate, isPending, error, variables } = useCall({
-    mutationFn: (file: File) => uploadFile(id, file, newKey(), setShare),
+    mutationFn: (file: File) => uploadFile(id, file, keyOf(file), setShare),
     onSuccess: onUploaded,
+    onSettled: (_, failure) => {
+      if (failure === null || isFinal(failure)) sent.current = null;
+    },
   });
   const take = (file: File | undefined) => {
     if (file === undefined) return;

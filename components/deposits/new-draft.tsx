@@ -2,14 +2,14 @@
 
 import type { Route } from 'next';
 import { useRouter } from 'next/navigation';
-import { useRef, useState } from 'react';
+import { useState } from 'react';
 import { Button } from '@/components/ui/button';
-import { newKey } from './call-api';
 import { createDraft } from './deposit-calls';
 import { emptyDocument } from './empty-document';
 import { type DepositingLab, LabChoice } from './lab-choice';
 import { ProblemNotice } from './problem-notice';
 import { useCall } from './use-call';
+import { useCallKey } from './use-call-key';
 
 interface NewDraftProps {
   labs: readonly DepositingLab[];
@@ -20,10 +20,11 @@ interface NewDraftProps {
 /** Begins an empty draft, for one of the person’s laboratories. */
 export function NewDraft({ labs, person }: NewDraftProps) {
   const router = useRouter();
-  const key = useRef(newKey());
+  const key = useCallKey();
   const [lab, setLab] = useState(labs[0]?.slug ?? '');
   const { mutate, isPending, isSuccess, error } = useCall({
-    mutationFn: () => createDraft(JSON.stringify(emptyDocument(person), null, 2), lab, key.current),
+    mutationFn: () => createDraft(JSON.stringify(emptyDocument(person), null, 2), lab, key.current()),
+    onError: key.after,
     onSuccess: ({ id }) => router.push(`/deposits/${id}` as Route),
   });
   return (

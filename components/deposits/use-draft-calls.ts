@@ -1,13 +1,14 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useRef, useState } from 'react';
+import { useState } from 'react';
 import type { DepositAnswer } from '@/schemas/deposit';
-import { CallFailed, type Complaint, newKey } from './call-api';
+import { CallFailed, type Complaint } from './call-api';
 import { deleteDraft, loadDraft, saveDraft, submitDraft } from './deposit-calls';
 import { readDraft } from './draft-value';
 import { keepDraft } from './kept-draft';
 import { useCall } from './use-call';
+import { useCallKey } from './use-call-key';
 import type { Draft, DraftContent, SentDraft } from './use-draft';
 
 /** The calls that change a draft, with what is to be shown of each. */
@@ -31,13 +32,11 @@ export function useDraftCalls(id: string, draft: Draft) {
     },
   });
 
-  const submissionKey = useRef(newKey());
+  const submissionKey = useCallKey();
   const submit = useCall({
-    mutationFn: () => submitDraft(id, draft.saved.version, submissionKey.current),
+    mutationFn: () => submitDraft(id, draft.saved.version, submissionKey.current()),
     onSuccess: () => router.refresh(),
-    onError: () => {
-      submissionKey.current = newKey();
-    },
+    onError: submissionKey.after,
   });
 
   const remove = useCall({

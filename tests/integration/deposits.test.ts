@@ -118,6 +118,33 @@ describe('a deposit', () => {
     expect([same.status, await same.text(), same.headers.get('etag')]).toEqual([304, '', etag]);
   });
 
+  it('has one ETag for its laboratory and another for a curator, and says on what it depends', async () => {
+    const id = await draft();
+    await call(app, 'POST', `/deposits/${id}/submission`, token);
+    const asking = { kind: 'changes-requested', letter: 'Please name the buffer.' };
+    await call(app, 'POST', `/deposits/${id}/decision`, curator, asking);
+    const responses = await Promise.all(
+      [token, curator].map((headers) => call(app, 'GET', `/deposits/${id}`, headers)),
+    );
+    const [own, seen] = responses.map((response) => response.headers.get('etag') ?? '');
+    expect(own).not.toBe(seen);
+    for (const { headers } of responses) expect(headers.get('vary')).toContain('Cookie, Authorization');
+    const crossed = await call(app, 'GET', `/deposits/${id}`, { ...curator, 'If-None-Match': own });
+    expect(crossed.status).toBe(200);
+    const saved = await call(app, 'PUT', `/deposits/${id}`, { ...token, 'If-Match': own }, exampleDocument());
+    expect(saved.status).toBe(200);
+    const stale = await call(app, 'PUT', `/deposits/${id}`, { ...token, 'If-Match': own }, exampleDocument());
+    expect(stale.status).toBe(412);
+  });
+
+  it('gives its assessment once under an ETag', async () => {
+    const id = await draft();
+    const path = `/deposits/${id}/assessment`;
+    const etag = (await call(app, 'GET', path, token)).headers.get('etag') ?? '';
+    const again = await call(app, 'GET', path, { ...token, 'If-None-Match': etag });
+    expect([again.status, again.headers.get('etag')]).toEqual([304, etag]);
+  });
+
   it('begins with a byte order mark without harm', async () => {
     const id = await draft(`\ufeff${JSON.stringify(exampleDocument())}`);
     expect((await read(id)).document).toEqual(exampleDocument());
@@ -194,6 +221,16 @@ describe('a deposit', () => {
 });
 
 describe('what is refused', () => {
+  it('with a token that does not hold is told so', async () => {
+    for (const Authorization of ['Bearer ckt_wrong', 'Basic eDp5', `${token.Authorization}x`]) {
+      const response = await call(app, 'GET', '/deposits', { Authorization });
+      expect(response.status).toBe(401);
+      expect(problemSchema.parse(await response.json()).detail).toContain('is not valid');
+    }
+    const visitor = problemSchema.parse(await (await call(app, 'GET', '/deposits')).json());
+    expect(visitor.detail).not.toContain('is not valid');
+  });
+
   it('without credentials is 401, whether or not there is such a deposit', async () => {
     const id = await draft();
     for (const [method, path, body] of [
@@ -299,7 +336,7 @@ describe('the list', () => {
       const link: string | undefined = /^<\/api\/v1(.*)>; rel="next"$/.exec(
         response.headers.get('link') ?? '',
       )?.[1];
-      expect(link === undefined).toBe(next === null);
+      expect(next).toBe(link === undefined ? null : `/api/v1${link}`);
       path = link;
     }
     expect(titles).toEqual([4, 3, 2, 1, 0].map((i) => `number ${i}`));
@@ -307,7 +344,10 @@ describe('the list', () => {
     expect(await none.json()).toEqual({ deposits: [], next: null });
   });
 
-  it.each(['state=nonsense', 'limit=0', 'limit=ten', 'cursor=made-up'])('refuses ?%s', async (query) => {
+  it.each([
+    ...['state=nonsense', 'limit=0', 'limit=ten', 'cursor=made-up', 'cursor='],
+    ...['nonsense=1', 'state=draft&state=draft'],
+  ])('refuses ?%s', async (query) => {
     expect(await codeOf(await call(app, 'GET', `/deposits?${query}`, token))).toBe('bad-parameter');
   });
 });

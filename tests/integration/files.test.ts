@@ -56,6 +56,21 @@ async function listed(): Promise<string[]> {
 }
 
 describe('a file', () => {
+  it('is sent as it is: a form is refused, and so is nothing', async () => {
+    const form = new FormData();
+    form.set('file', new Blob(['a;b']), 'raw.csv');
+    const address = `${app.url}/api/v1/deposits/${id}/files`;
+    const refused = await fetch(address, { method: 'POST', headers: token, body: form });
+    expect([refused.status, await codeOf(refused)]).toEqual([415, 'not-plain-file']);
+    const empty = await send('empty.csv', '');
+    expect([empty.status, await codeOf(empty)]).toEqual([422, 'empty-file']);
+    expect(await listed()).toEqual([]);
+    const list = await call(app, 'GET', `/deposits/${id}/files`, token);
+    const etag = list.headers.get('etag') ?? '';
+    const same = await call(app, 'GET', `/deposits/${id}/files`, { ...token, 'If-None-Match': etag });
+    expect(same.status).toBe(304);
+  });
+
   it('comes back byte for byte, as an attachment that runs nothing', async () => {
     const bytes = randomBytes(11 * MIB + 3);
     const attached = await send('Rohdaten µM "1".bin', bytes, { 'Content-Digest': digest(bytes) });

@@ -72,6 +72,22 @@ describe('limits', () => {
     expect(JSON.stringify(app.logged())).not.toContain('192.0.2.1');
   });
 
+  it('600 reads a minute of what is published, in the list, the points and the overlay together', async () => {
+    app = await startApp();
+    const paths = ['/datasets?q=x', '/overlay', '/systems', '/datasets/CK-000001/points'];
+    for (let i = 0; i < 600; i++) {
+      const response = await fetch(`${app.url}/api/v1${paths[i % 4]}`);
+      expect([200, 404]).toContain(response.status);
+      expect(left(response, 'reads')).toBe(599 - i);
+    }
+    const refused = await fetch(`${app.url}/api/v1/datasets`);
+    expect(refused.status).toBe(429);
+    expect(refused.headers.get('ratelimit-policy')).toBe('"reads";q=600;w=60');
+    expect(Number(refused.headers.get('retry-after'))).toBeGreaterThanOrEqual(1);
+    expect(problemSchema.parse(await refused.json()).type).toBe('/api/v1/problems/too-many-calls');
+    expect((await postDocument(app.url, exampleDocument())).status).toBe(200);
+  });
+
   it('are ten times higher in the demonstration', async () => {
     app = await startApp({ CURVEKEEP_DEMO: '1' });
     const response = await postDocument(app.url, exampleDocument());

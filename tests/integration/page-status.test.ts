@@ -88,6 +88,15 @@ describe('a page', () => {
     expect((await get('/datasets/CK-000101')).status).toBe(200);
   });
 
+  it('that is not there says so in its title; a place in a list that is none leads to its beginning', async () => {
+    const titleOf = async (path: string) => /<title>([^<]*)/.exec(await (await get(path)).text())?.[1];
+    expect(await titleOf('/datasets/CK-009999')).toContain('There is no such dataset');
+    expect(await titleOf('/datasets/CK-000100')).toContain('Withdrawn dataset');
+    expect(await titleOf('/labs/nobody')).toContain('There is no such laboratory');
+    const junk = await get('/deposits?cursor=junk', member);
+    expect([junk.status, junk.headers.get('location')]).toEqual([307, '/deposits']);
+  });
+
   it('answers many at a time each with its own', async () => {
     const paths = ['/datasets/CK-000100', '/datasets/CK-000101', '/deposits', '/datasets/CK-009999'];
     const answers = await Promise.all([...paths, ...paths, ...paths].map((path) => get(path)));

@@ -100,6 +100,9 @@ describe('one dataset', () => {
     ['/api/v1/datasets/nonsense/document', 404],
     ['/api/v1/datasets?flag=bad', 400],
     ['/api/v1/datasets?cursor=bm90', 400],
+    [`/api/v1/datasets?cursor=${Buffer.from('[1e999,1]').toString('base64url')}`, 400],
+    ['/api/v1/datasets?from=5&to=-5', 400],
+    ['/api/v1/datasets?from=abc', 400],
     ['/api/v1/overlay?limit=3', 400],
     ['/api/v1/systems?limit=x', 400],
   ])('%s: %i as a problem', async (path, status, accept = '*/*') => {

@@ -98,7 +98,7 @@ describe('stopping', () => {
     const computing = postDocument(app.url, text);
     await new Promise((resolve) => setTimeout(resolve, 60));
     const stopping = app.stop();
-    await new Promise((resolve) => setTimeout(resolve, 50));
+    await expect.poll(() => app.logged().some(({ msg }) => msg === 'stopping')).toBe(true);
     await expect(fetch(`${app.url}/api/v1/health`)).rejects.toThrow();
     const response = await computing;
     expect(response.status).toBe(200);

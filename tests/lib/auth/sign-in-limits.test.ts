@@ -30,6 +30,13 @@ describe('slowing of failed sign-ins', () => {
     expect(slowingOf(tried, HERE).waitMs).toBe(4000);
   });
 
+  it('does not make an account wait for others behind an address where it is known, but for its own failures', () => {
+    const others = attempts(40, { accountKey: 'somebody else' });
+    expect(slowingOf(others, HERE, false).waitMs).toBe(300_000);
+    expect(slowingOf(others, HERE, true).waitMs).toBe(0);
+    expect(slowingOf([...others, ...attempts(6, {})], HERE, true).waitMs).toBe(2000);
+  });
+
   it('does not lock the owner out from another address: the answer comes, three seconds late at most', () => {
     const elsewhere = attempts(500, { addressKey: 'elsewhere' });
     expect(slowingOf(elsewhere, HERE)).toEqual({ waitMs: 0, holdMs: 3000 });

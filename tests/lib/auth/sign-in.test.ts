@@ -4,9 +4,10 @@ import { afterEach, beforeAll, describe, expect, it, vi } from 'vitest';
 import { readDatabase, write } from '@/db/client';
 import { selectAuditOf } from '@/db/queries/audit';
 import { memberships } from '@/db/tables/laboratories';
-import { people, sessions, signInAttempts } from '@/db/tables/people';
+import { people, sessions, signInAttempts, signInPlaces } from '@/db/tables/people';
 import type { Actor } from '@/lib/auth/actor';
 import { actorOfRequest } from '@/lib/auth/current-actor';
+import { forgetEndedSessions } from '@/lib/auth/session';
 import { signIn } from '@/lib/auth/sign-in';
 import { signOut } from '@/lib/auth/sign-out';
 import { ensureLaboratory, ensureMembership, ensurePerson } from '@/lib/people/ensure-demo-accounts';
@@ -166,7 +167,60 @@ describe('failed sign-ins', () => {
   });
 });
 
+describe('a laboratory behind one address', () => {
+  it('goes on signing in where it did before, whatever somebody there tries', async () => {
+    const from = '198.51.100.99';
+    const email = 'colleague@test.example';
+    await ensurePerson({ email, name: 'C. Example', password: PASSWORD, role: 'depositor' });
+    const entered = await attempt(email, PASSWORD, from);
+    expect(entered.ok).toBe(true);
+    for (let i = 0; i < 32; i++) await attempt(`guess-${i}@test.example`, 'a wrong guess', from);
+    expect(await attempt('fresh@test.example', PASSWORD, from)).toMatchObject({
+      failure: { code: 'too-many-calls' },
+    });
+    expect((await attempt(email, PASSWORD, from)).ok).toBe(true);
+    const limited = await selectAuditOf('limit:sign-in');
+    expect(limited.map(({ action }) => action)).toContain('limited');
+    const places = await (await readDatabase()).select().from(signInPlaces);
+    expect(JSON.stringify(places)).not.toMatch(/198\.51|test\.example|colleague/);
+  });
+});
+
 describe('a session', () => {
+  it('is written once when half of its time is over, not at every request; also near its end', async () => {
+    const id = await sessionId();
+    const idHash = createHash('sha256').update(id).digest('hex');
+    const end = async () => {
+      const rows = await (await readDatabase()).select().from(sessions).where(eq(sessions.idHash, idHash));
+      return rows[0]?.expiresAt ?? 0;
+    };
+    for (const days of [8, 8, 8, 3]) {
+      inDays(days);
+      await actorWith(id);
+      const moved = await end();
+      vi.setSystemTime(Date.now() + 60_000);
+      expect((await actorWith(id)).kind).toBe('person');
+      expect(await end()).toBe(moved);
+    }
+  });
+
+  it('that is over is forgotten by a chore, used or not', async () => {
+    const [id, used] = [await sessionId(), await sessionId()];
+    const there = async () =>
+      (await (await readDatabase()).select().from(sessions)).map(({ idHash }) => idHash);
+    const hashes = [id, used].map((one) => createHash('sha256').update(one).digest('hex'));
+    inDays(10);
+    await actorWith(used);
+    inDays(10);
+    await forgetEndedSessions();
+    expect(await there()).not.toContain(hashes[0]);
+    expect(await there()).toContain(hashes[1]);
+    await actorWith(used);
+    inDays(10.1);
+    await forgetEndedSessions();
+    expect(await there()).not.toContain(hashes[1]);
+  });
+
   it('is dead after signing out, in the database and in the browser', async () => {
     const id = await sessionId();
     const cookie = await signOut(await actorWith(id), id);

@@ -1,6 +1,7 @@
-import { describe, expect, it } from 'vitest';
-import { readDatabase } from '@/db/client';
+import { describe, expect, it, vi } from 'vitest';
+import { readDatabase, write } from '@/db/client';
 import { selectDecisions } from '@/db/queries/decisions';
+import { removeDeposit, updateDocument, updateState } from '@/db/queries/deposits';
 import { selectRevisions } from '@/db/queries/revisions';
 import { type Actor, VISITOR } from '@/lib/auth/actor';
 import { acceptDeposit } from '@/lib/curation/accept-deposit';
@@ -154,6 +155,50 @@ describe('a decision', { timeout: 60_000 }, () => {
     expect(await decisionsOf(id)).toHaveLength(1);
   });
 
+  it.each([acceptDeposit, askForChanges, declineDeposit])(
+    'about another revision under the same key is another one (%o)',
+    async (verb) => {
+      const id = await makeDeposit(cast, 'submitted');
+      const call = { actor: cast.curator, id, letter: 'x', idempotencyKey: 'a revision' };
+      worked(await verb({ ...call, revision: 1 }));
+      worked(await verb({ ...call, revision: 1 }));
+      for (const revision of [2, undefined])
+        expect(codeOf(await verb({ ...call, revision }))).toBe('idempotency-mismatch');
+    },
+  );
+
+  it('is made of the state and version that were read, and of no other', async () => {
+    const id = await makeDeposit(cast, 'submitted');
+    const before = await stored(id);
+    const version = before?.version ?? 0;
+    const to = { state: 'declined', updatedAt: 1, updatedBy: 'system' } as const;
+    const content = { document: '{}', title: '', system: '', errors: '[]', errorCount: 0 };
+    await write('acknowledged', async (tx) => {
+      for (const expected of [
+        { id, version: version - 1, from: 'submitted' as const },
+        { id, version, from: 'in-review' as const },
+      ]) {
+        expect(await updateState(tx, expected, to)).toBe(false);
+        expect(await updateDocument(tx, expected, { ...content, updatedAt: 1, updatedBy: 'x' })).toBe(false);
+        expect(await removeDeposit(tx, expected)).toBe(false);
+      }
+    });
+    expect(await stored(id)).toEqual(before);
+  });
+
+  it.each(['\u0000', 'a\u0007', 'half \ud800'])(
+    'keeps no letter that cannot be read back: %j',
+    async (letter) => {
+      const id = await makeDeposit(cast, 'submitted');
+      for (const verb of [acceptDeposit, askForChanges, declineDeposit])
+        expect(codeOf(await verb({ actor: cast.curator, id, letter: `Dear ${letter}` }))).toBe(
+          'invalid-input',
+        );
+      worked(await acceptDeposit({ actor: cast.curator, id, letter: 'Line\n\tline\r\n– µ' }));
+      expect(await decisionsOf(id)).toMatchObject([{ letter: 'Line\n\tline\r\n– µ' }]);
+    },
+  );
+
   it('gives many deposits at once accessions of their own, without a gap', async () => {
     const ids: string[] = [];
     for (let i = 0; i < 8; i++) ids.push(await makeDeposit(cast, 'submitted'));
@@ -179,7 +224,14 @@ describe('the queue', { timeout: 60_000 }, () => {
     expect(queue.map(({ submittedAt }) => submittedAt)).toEqual(
       queue.map(({ submittedAt }) => submittedAt).toSorted(),
     );
-    expect(queue.every(({ ageMs }) => ageMs >= 0)).toBe(true);
+    vi.useFakeTimers({ toFake: ['Date'], now: Date.now() + 90_000 });
+    try {
+      const later = worked(await listQueue({ actor: cast.curator })).queue;
+      for (const { ageMs, submittedAt } of later) expect(ageMs).toBe(Date.now() - submittedAt);
+      expect(Math.min(...later.map(({ ageMs }) => ageMs))).toBeGreaterThanOrEqual(90_000);
+    } finally {
+      vi.useRealTimers();
+    }
   });
 
   it('marks what a curator may not decide on', async () => {

@@ -2,10 +2,14 @@ import { describe, expect, it } from 'vitest';
 import { VISITOR } from '@/lib/auth/actor';
 import { createDeposit } from '@/lib/deposits/create-deposit';
 import { listDeposits } from '@/lib/deposits/list-deposits';
+import { listDepositsWithCounts } from '@/lib/deposits/list-deposits-with-counts';
+import { loadDeposit } from '@/lib/deposits/load-deposit';
+import { saveDraft } from '@/lib/deposits/save-draft';
 import {
   auditOf,
   bodyOf,
   codeOf,
+  listSystem,
   makeLab,
   makePerson,
   stored,
@@ -37,6 +41,44 @@ describe('creating a deposit', { timeout: 30_000 }, () => {
     expect(row?.document).toBe(text);
     expect(row?.createdBy).toBe(`person:${cast.depositor.id}`);
     expect(await auditOf(deposit.id)).toEqual(['created: draft']);
+  });
+
+  it('keeps a title that lists can show: no control character, cut between characters', async () => {
+    const titled = async (title: string) => {
+      const text = `{"title": ${JSON.stringify(title)}, "system": "a\\u0000b"}`;
+      const made = await createDeposit({ actor: cast.token, lab: null, readBody: bodyOf(text) });
+      const { deposit } = worked(made);
+      expect((await stored(deposit.id))?.document).toBe(text);
+      expect(deposit.system).toBe('a b');
+      return deposit.title;
+    };
+    expect(await titled('Before\u0000after\nnext')).toBe('Before after next');
+    expect(await titled(`${'x'.repeat(299)}𝛿y`)).toBe(`${'x'.repeat(299)}𝛿`);
+    expect(await titled('half \ud800')).toBe('half');
+  });
+
+  it('counts a system that is not listed among what is wrong, in every answer', async () => {
+    const unlisted = bodyOf({ ...exampleDocument(), system: 'nobody-knows' });
+    const created = worked(await createDeposit({ actor: cast.token, lab: null, readBody: unlisted }));
+    const { id } = created.deposit;
+    const saved = worked(await saveDraft({ actor: cast.token, id, expected: 'any', readBody: unlisted }));
+    const loaded = worked(await loadDeposit({ actor: cast.token, id }));
+    const { deposits } = worked(await listDepositsWithCounts({ actor: cast.token, limit: 100 }));
+    for (const { deposit, errors } of [created, saved, loaded]) {
+      expect(errors.map(({ pointer }) => pointer)).toEqual(['/system']);
+      expect(deposit.errorCount).toBe(1);
+    }
+    expect(deposits.find((one) => one.id === id)?.errorCount).toBe(1);
+    await listSystem('nobody-knows');
+    expect(worked(await loadDeposit({ actor: cast.token, id }))).toMatchObject({
+      errors: [],
+      deposit: { errorCount: 0 },
+    });
+    // Told once, not twice.
+    const bad = bodyOf({ ...exampleDocument(), system: 'No Slug' });
+    const both = worked(await saveDraft({ actor: cast.token, id, expected: 'any', readBody: bad }));
+    expect(both.errors.map(({ pointer }) => pointer)).toEqual(['/system']);
+    expect(both.deposit.errorCount).toBe(1);
   });
 
   it('works with a token, for its laboratory', async () => {

@@ -3,8 +3,10 @@ import { readdir } from 'node:fs/promises';
 import path from 'node:path';
 import { Readable } from 'node:stream';
 import { buffer } from 'node:stream/consumers';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { type Actor, VISITOR } from '@/lib/auth/actor';
+import { acceptDeposit } from '@/lib/curation/accept-deposit';
+import { askForChanges } from '@/lib/curation/ask-for-changes';
 import { attachFile } from '@/lib/deposits/attach-file';
 import { detectMediaType } from '@/lib/deposits/detect-media-type';
 import { listFiles, openFile } from '@/lib/deposits/open-file';
@@ -13,6 +15,19 @@ import type { DepositState } from '@/lib/deposits/states';
 import { submitDeposit } from '@/lib/deposits/submit-deposit';
 import { codeOf, forceState, makeDeposit, tokenOf, worked } from '@/tests/support/collection';
 import { collectionForTests } from '@/tests/support/collection-test';
+
+/** Of the writes that attach a file, so many lose their answer after the commit. */
+const losing = { answers: 0 };
+vi.mock('@/db/client', async (original) => {
+  const client = await original<typeof import('@/db/client')>();
+  const write: typeof client.write = async (durability, work) => {
+    const outcome = await client.write(durability, work);
+    const attached = outcome !== null && typeof outcome === 'object' && 'file' in outcome;
+    if (attached && losing.answers-- > 0) throw new Error('The answer was lost.');
+    return outcome;
+  };
+  return { ...client, write };
+});
 
 const { cast, dataDir } = collectionForTests({ storage: true });
 
@@ -175,8 +190,56 @@ describe('reading a file', { timeout: 60_000 }, () => {
     expect(await all()).toEqual(['open', 'not-found', 'not-found', 'not-found']);
     worked(await submitDeposit({ actor: cast.depositor, id }));
     expect(await all()).toEqual(['open', 'open', 'not-found', 'not-found']);
-    await forceState(id, 'published');
+    worked(await acceptDeposit({ actor: cast.curator, id }));
     expect(await all()).toEqual(['open', 'open', 'open', 'open']);
+  });
+});
+
+describe('files that came after a submission', { timeout: 60_000 }, () => {
+  it('are seen by the laboratory alone, until they are submitted and published as well', async () => {
+    const id = await makeDeposit(cast);
+    const { file: first } = worked(await attach(cast.depositor, id));
+    worked(await submitDeposit({ actor: cast.depositor, id }));
+    worked(await askForChanges({ actor: cast.curator, id, letter: 'Please add.' }));
+    await new Promise((resolve) => setTimeout(resolve, 5));
+    const { file: second } = worked(await attach(cast.depositor, id, Buffer.from('y')));
+    const seen = async (actor: Actor) => {
+      const { files } = worked(await listFiles({ actor, id }));
+      const opened = await openFile({ actor, id, fileId: second.id });
+      return [...files.map((file) => file.id), opened.ok];
+    };
+    expect(await seen(cast.depositor)).toEqual([first.id, second.id, true]);
+    for (const actor of [cast.curator, cast.administrator])
+      expect(await seen(actor)).toEqual([first.id, false]);
+    // As if only the first revision were published.
+    await forceState(id, 'published');
+    expect(codeOf(await openFile({ actor: VISITOR, id, fileId: first.id }))).toBe('not-found');
+    await forceState(id, 'changes-requested');
+    worked(await submitDeposit({ actor: cast.depositor, id }));
+    expect(await seen(cast.curator)).toEqual([first.id, second.id, true]);
+    worked(await acceptDeposit({ actor: cast.curator, id }));
+    expect(await seen(VISITOR)).toEqual([first.id, second.id, true]);
+  });
+});
+
+describe('an upload', { timeout: 60_000 }, () => {
+  it('of nothing is refused, and nothing of it is kept', async () => {
+    const id = await makeDeposit(cast);
+    const before = await objectCount();
+    expect(codeOf(await attach(cast.depositor, id, Buffer.alloc(0)))).toBe('empty-file');
+    expect(await objectCount()).toBe(before);
+  });
+
+  it('keeps its object where the commit was made and its answer lost', async () => {
+    const id = await makeDeposit(cast);
+    const before = await objectCount();
+    losing.answers = 1;
+    await expect(attach(cast.depositor, id, Buffer.from('kept'))).rejects.toThrow('The answer was lost.');
+    const { files } = worked(await listFiles({ actor: cast.depositor, id }));
+    expect(files).toHaveLength(1);
+    const { open } = worked(await openFile({ actor: cast.depositor, id, fileId: files[0]?.id ?? '' }));
+    expect((await buffer(await open())).toString()).toBe('kept');
+    expect(await objectCount()).toBe(before + 1);
   });
 });
 

@@ -33,6 +33,7 @@ describe('saving a draft', { timeout: 60_000 }, () => {
     expect(loaded.document).toBe('{"title" : "unfinished"}');
     expect(loaded.errors).toEqual(expect.arrayContaining(errors));
     expect(loaded.errors.map(({ pointer }) => pointer)).toContain('/system');
+    expect(await auditOf(id)).toEqual(['created: draft', 'saved: version 2']);
   });
 
   it('needs the version, and refuses a stale one', async () => {

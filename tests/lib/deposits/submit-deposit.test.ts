@@ -1,7 +1,11 @@
 import { createHash } from 'node:crypto';
+import { eq } from 'drizzle-orm';
 import { describe, expect, it } from 'vitest';
-import { readDatabase } from '@/db/client';
+import { readDatabase, write } from '@/db/client';
+import { addComputationUse, selectComputationUse, selectLeases } from '@/db/queries/computation-limits';
 import { selectNewestRevision, selectRevisions } from '@/db/queries/revisions';
+import { laboratories } from '@/db/tables/laboratories';
+import { systems } from '@/db/tables/systems';
 import { type Actor, VISITOR } from '@/lib/auth/actor';
 import { deleteDraft } from '@/lib/deposits/delete-draft';
 import { loadAssessment } from '@/lib/deposits/load-assessment';
@@ -10,6 +14,7 @@ import { recallDeposit } from '@/lib/deposits/recall-deposit';
 import { saveDraft } from '@/lib/deposits/save-draft';
 import type { DepositState } from '@/lib/deposits/states';
 import { submitDeposit } from '@/lib/deposits/submit-deposit';
+import { depositEtag, depositJson } from '@/lib/deposits/write-answer';
 import { parseDocument } from '@/lib/documents/parse-document';
 import { assess } from '@/lib/engine/assess';
 import { auditOf, bodyOf, codeOf, makeDeposit, stored, tokenOf, worked } from '@/tests/support/collection';
@@ -120,6 +125,20 @@ describe('submitting a deposit', { timeout: 60_000 }, () => {
     expect(await revisionsOf(id)).toHaveLength(1);
   });
 
+  it('is not told again under its key of what has come back since', async () => {
+    const id = await makeDeposit(cast);
+    const call = { actor: cast.token, id, idempotencyKey: 'and again' };
+    worked(await submitDeposit(call));
+    worked(await recallDeposit({ actor: cast.token, id }));
+    const again = await submitDeposit(call);
+    expect(codeOf(again)).toBe('idempotency-mismatch');
+    expect(again.ok || again.failure.detail).toContain('revision 1');
+    expect(worked(await submitDeposit({ ...call, idempotencyKey: 'anew' })).revision).toBe(2);
+    expect(codeOf(await submitDeposit({ ...call, idempotencyKey: 'anew', expected: [9] }))).toBe(
+      'idempotency-mismatch',
+    );
+  });
+
   it('never snapshots another document than the one that was assessed', async () => {
     const id = await makeDeposit(cast);
     const readBody = bodyOf({ title: 'not valid at all' });
@@ -196,5 +215,88 @@ describe('the assessment of a deposit', { timeout: 30_000 }, () => {
     expect(worked(await loadDeposit({ actor: cast.curator, id })).document).not.toContain('secret');
     expect(worked(await loadDeposit({ actor: cast.depositor, id })).document).toContain('secret');
     expect(codeOf(await loadAssessment({ actor: cast.outsider, id }))).toBe('not-found');
+  });
+
+  it('is not computed for whoever has it already', async () => {
+    const id = await makeDeposit(cast);
+    const { tag } = worked(await loadAssessment({ actor: cast.depositor, id }));
+    const asked: string[] = [];
+    const has = (one: string) => asked.push(one) > 0 && one === tag;
+    expect(await loadAssessment({ actor: cast.depositor, id, has })).toEqual({ ok: true, unchanged: tag });
+    worked(await saveDraft({ actor: cast.depositor, id, expected: 'any', readBody: bodyOf({}) }));
+    expect(codeOf(await loadAssessment({ actor: cast.depositor, id, has }))).toBe('invalid-document');
+    expect(asked[1]).not.toBe(tag);
+  });
+
+  it('of drafts is limited by actor, and says how long to wait', async () => {
+    const id = await makeDeposit(cast);
+    const busy = { ...cast.token, id: 'a busy script' };
+    const key = `actor token:${busy.id}`;
+    const second = Math.floor(Date.now() / 1000);
+    await write('counter', (tx) => addComputationUse(tx, key, { second, calls: 120, points: 0 }));
+    const refused = await loadAssessment({ actor: busy, id });
+    expect(codeOf(refused)).toBe('too-many-calls');
+    const wait = refused.ok ? 0 : (refused.failure.retryAfterSeconds ?? 0);
+    expect(wait).toBeGreaterThan(50);
+    expect(wait).toBeLessThanOrEqual(60);
+    worked(await loadAssessment({ actor: cast.token, id }));
+  });
+
+  it('of a draft is counted with its points, and given back its place', async () => {
+    const actor = { ...cast.token, id: 'a counted script' };
+    const id = await makeDeposit(cast, 'draft', exampleDocument({ series: 3, pointsPerSeries: 9 }));
+    for (let i = 0; i < 3; i++) worked(await loadAssessment({ actor, id }));
+    const use = await write('counter', (tx) => selectComputationUse(tx, `actor token:${actor.id}`, 0));
+    expect(use.reduce((sum, { points }) => sum + points, 0)).toBe(81);
+    expect(await write('counter', (tx) => selectLeases(tx, `actor token:${actor.id}`))).toMatchObject({
+      count: 0,
+    });
+  });
+});
+
+describe('what a curator sees of a deposit that is being changed', { timeout: 60_000 }, () => {
+  it('is the revision: title, system and errors as well', async () => {
+    const id = await makeDeposit(cast, 'changes-requested');
+    const title = worked(await loadDeposit({ actor: cast.curator, id })).deposit.title;
+    const readBody = bodyOf({ title: 'Not yet told', system: 'not-yet-told' });
+    worked(await saveDraft({ actor: cast.depositor, id, expected: 'any', readBody }));
+    const own = worked(await loadDeposit({ actor: cast.depositor, id }));
+    expect(own.deposit).toMatchObject({ title: 'Not yet told', system: 'not-yet-told' });
+    expect(own.deposit.errorCount).toBe(own.errors.length);
+    for (const actor of [cast.curator, cast.administrator]) {
+      const seen = worked(await loadDeposit({ actor, id }));
+      expect(seen.deposit).toMatchObject({ title, system: 'alrq-velline', errorCount: 0 });
+      expect(depositJson(seen)).not.toMatch(/not.yet.told/i);
+    }
+  });
+
+  it('bears another ETag than what its laboratory sees; each changes with all that stands in it', async () => {
+    const id = await makeDeposit(cast, 'changes-requested');
+    const tags = async () => {
+      const [own, seen] = [
+        worked(await loadDeposit({ actor: cast.depositor, id })),
+        worked(await loadDeposit({ actor: cast.curator, id })),
+      ];
+      return [depositEtag(own), depositEtag(seen)];
+    };
+    const first = await tags();
+    expect(await tags()).toEqual(first);
+    expect(first[0]).toMatch(/^"3-w-[\w-]+"$/);
+    expect(first[1]).toMatch(/^"3-r1-[\w-]+"$/);
+    await write('acknowledged', async (tx) => {
+      await tx.update(systems).set({ status: 'proposed' });
+    });
+    const unlisted = await tags();
+    expect(unlisted[0]).not.toBe(first[0]);
+    await write('acknowledged', async (tx) => {
+      await tx.update(systems).set({ status: 'listed' });
+      await tx
+        .update(laboratories)
+        .set({ name: 'Renamed (invented)' })
+        .where(eq(laboratories.id, cast.lab.labId));
+    });
+    const renamed = await tags();
+    expect(renamed[0]).not.toBe(first[0]);
+    expect(renamed[1]).not.toBe(first[1]);
   });
 });
