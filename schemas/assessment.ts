@@ -19,6 +19,7 @@ const noteSchema = z
       'depletion',
       'derived-not-defined',
       'linear-uncertainty',
+      'shape-not-tried',
       'no-degrees-of-freedom',
       'normalisation',
       'protein-concentration-not-stated',

@@ -43,7 +43,7 @@ const estimateSchema = z
     value: z.number(),
     u: z.number().nullable().meta({
       description:
-        'Standard error from the inverse of the normal matrix, not rescaled; null where not determined',
+        'Standard error from the inverse of the normal matrix, not rescaled; null where the points do not depend on the value, or it ended at a bound of its range',
     }),
     stated: z.number().meta({
       description:
@@ -55,7 +55,10 @@ const estimateSchema = z
 
 export const refitAnswerSchema = z
   .strictObject({
-    converged: z.boolean(),
+    converged: z.boolean().meta({
+      description:
+        'false also where the points respond to none of the values, so that nothing says where to go',
+    }),
     iterations: z.int().min(0),
     chiSquared: z.number().min(0),
     degreesOfFreedom: z.int().min(0),

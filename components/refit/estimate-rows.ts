@@ -72,8 +72,11 @@ function statedIn(document: DatasetDocument, series: Series, place: ParameterPla
   return statement && { value: statement.value, u: statement.u ?? 0 };
 }
 
-function differenceOf({ value, u, stated }: RefitEstimate, statedU: number | null): number | null {
-  if (u === null || statedU === null) return null;
+function differenceOf(
+  { value, u, stated, determined }: RefitEstimate,
+  statedU: number | null,
+): number | null {
+  if (!determined || u === null || statedU === null) return null;
   const combined = Math.hypot(u, statedU);
   return combined > 0 ? (value - stated) / combined : null;
 }

@@ -97,7 +97,9 @@ function counted(count: number): string {
   return count === 1 ? 'One value is' : `${formatCount(count)} values are`;
 }
 
-function headline({ converged, iterations }: RefitResult): string {
+function headline({ converged, iterations, estimates }: RefitResult): string {
+  if (!converged && iterations <= 1 && estimates.every(({ determined }) => !determined))
+    return 'The points do not respond to these values where they start: state values nearer to the truth first.';
   return converged
     ? `Converged after ${formatCount(iterations)} ${iterations === 1 ? 'iteration' : 'iterations'}.`
     : `Did not converge within ${formatCount(iterations)} iterations; the values are where it stood.`;

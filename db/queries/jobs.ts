@@ -1,5 +1,5 @@
 /** The SQL behind the queue of jobs; the rules of retries are in lib/jobs. */
-import { and, eq, isNull, lte, or, sql } from 'drizzle-orm';
+import { and, eq, inArray, isNull, lt, lte, or, sql } from 'drizzle-orm';
 import { readDatabase, type Transaction, write } from '@/db/client';
 import { jobs } from '@/db/tables/jobs';
 
@@ -19,28 +19,35 @@ export async function insertJob(tx: Transaction, job: typeof jobs.$inferInsert):
   await tx.insert(jobs).values(job);
 }
 
-const isDue = (nowMs: number) =>
+const isDue = (kinds: readonly string[], nowMs: number) =>
   and(
+    inArray(jobs.kind, kinds),
     isNull(jobs.givenUpAt),
     lte(jobs.runAt, nowMs),
     or(isNull(jobs.leaseToken), lte(jobs.leaseUntil, nowMs)),
   );
 
-/** Whether a job waits to be begun. */
-export async function hasDueJob(nowMs: number): Promise<boolean> {
+/** Whether a job of one of the kinds waits to be begun. */
+export async function hasDueJob(kinds: readonly string[], nowMs: number): Promise<boolean> {
   const database = await readDatabase();
-  const found = await database.select({ id: jobs.id }).from(jobs).where(isDue(nowMs)).limit(1);
+  const found = await database.select({ id: jobs.id }).from(jobs).where(isDue(kinds, nowMs)).limit(1);
   return found.length > 0;
 }
 
-/** Takes the job that has waited longest, if there is one; of two that ask at once, each gets another. */
+/** Takes the job of those kinds that has waited longest, if there is one; of two that ask at once, each gets another. */
 export async function claimDueJob(
+  kinds: readonly string[],
   leaseToken: string,
   nowMs: number,
   leaseUntil: number,
 ): Promise<HeldJob | null> {
   return write('acknowledged', async (tx) => {
-    const oldest = tx.select({ id: jobs.id }).from(jobs).where(isDue(nowMs)).orderBy(jobs.runAt).limit(1);
+    const oldest = tx
+      .select({ id: jobs.id })
+      .from(jobs)
+      .where(isDue(kinds, nowMs))
+      .orderBy(jobs.runAt)
+      .limit(1);
     const [claimed] = await tx
       .update(jobs)
       .set({ leaseToken, leaseUntil, attempts: sql`${jobs.attempts} + 1` })
@@ -69,6 +76,13 @@ export async function deleteHeldJob(tx: Transaction, job: HeldJob): Promise<bool
 /** Removes a job whether or not somebody is at work on it. */
 export async function deleteJob(tx: Transaction, id: string): Promise<void> {
   await tx.delete(jobs).where(eq(jobs.id, id));
+}
+
+/** Removes the jobs that were given up before then. */
+export async function deleteGivenUpJobs(beforeMs: number): Promise<void> {
+  await write('counter', async (tx) => {
+    await tx.delete(jobs).where(lt(jobs.givenUpAt, beforeMs));
+  });
 }
 
 /** Lets go of a job that is held, with what is to become of it; false where it is no longer held. */

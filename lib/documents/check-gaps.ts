@@ -1,3 +1,4 @@
+import { LARGEST_KT } from '@/lib/engine/stated-ranges';
 import { energyToKT, toKelvin } from '@/lib/engine/units';
 import type {
   DatasetDocument,
@@ -7,9 +8,6 @@ import type {
   Series,
 } from '@/schemas/dataset-1.generated';
 import { eachSeries, type MeaningCheck, type Report } from './document-report';
-
-/** The largest energy that is taken, either way, kT. */
-export const LARGEST_KT = 200;
 
 /** Every series states a gap, of the whole complex or per site, and none is beyond 200 kT. */
 export const checkGaps: MeaningCheck = (document, report) => {

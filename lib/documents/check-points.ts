@@ -1,6 +1,7 @@
+import { LARGEST_KT } from '@/lib/engine/stated-ranges';
 import { energyToKT } from '@/lib/engine/units';
 import type { Modulation, Point } from '@/schemas/dataset-1.generated';
-import { kelvinOf, LARGEST_KT } from './check-gaps';
+import { kelvinOf } from './check-gaps';
 import { unitsOfLigands } from './check-units';
 import { type ConcentrationRange, concentrationRange } from './concentration-range';
 import { eachSeries, type MeaningCheck, type Report } from './document-report';

@@ -1,10 +1,9 @@
+import { LARGEST_KT, LARGEST_RELATIVE_U } from '@/lib/engine/stated-ranges';
 import { energyToKT } from '@/lib/engine/units';
-import { kelvinOf, LARGEST_KT } from './check-gaps';
+import { kelvinOf } from './check-gaps';
 import { eachSeries, type MeaningCheck, type Report } from './document-report';
 import { type Statement, statedQuantities } from './stated-quantities';
 
-/** Beyond this an uncertainty says only that nothing is known; squares of it would swamp the computation. */
-const MOST_RELATIVE = 100;
 /** u of a temperature, K: as wide as the temperatures that are taken. */
 const MOST_TEMPERATURE_U = 250;
 
@@ -40,6 +39,6 @@ function checkEnergyU({ u = 0, unit }: Statement, kelvin: number, pointer: strin
 }
 
 function checkRelativeU({ u = 0, value }: Statement, pointer: string, report: Report): void {
-  if (u > MOST_RELATIVE * value)
-    report(pointer, `u may be at most ${MOST_RELATIVE} times the value ${value}; found ${u}`);
+  if (u > LARGEST_RELATIVE_U * value)
+    report(pointer, `u may be at most ${LARGEST_RELATIVE_U} times the value ${value}; found ${u}`);
 }

@@ -5,7 +5,7 @@ import { statedQuantities } from './stated-quantities';
 /** Most uncertain quantities that the parameters of one series may state. Published models have a dozen. */
 const MOST_UNCERTAIN_QUANTITIES = 400;
 /** Most numbers in the table of derivatives, points × uncertain quantities over all series; 64 MB of memory. */
-const MOST_DERIVATIVES = 8_000_000;
+const MOST_DERIVATIVES = 4_000_000;
 /** Most labels of shared quantities in a dataset: their covariance is solved as one dense matrix. */
 const MOST_LABELS = 400;
 

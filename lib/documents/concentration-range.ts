@@ -1,3 +1,4 @@
+import { CONCENTRATION_RANGES, RANGE_ROUNDING } from '@/lib/engine/stated-ranges';
 import {
   baseUnitsPer,
   type ConcentrationKind,
@@ -5,14 +6,11 @@ import {
   concentrationKind,
 } from '@/lib/engine/units';
 
-/** What is taken of concentrations and dissociation constants that are not 0: mol/L, and Pa. */
-const RANGES: Record<ConcentrationKind, { lowest: number; highest: number; words: string }> = {
-  molar: { lowest: 1e-15, highest: 1e3, words: '1e-15 to 1e3 M' },
-  pressure: { lowest: 1e-9, highest: 1e9, words: '1e-9 to 1e9 Pa' },
+/** In words, what is taken of concentrations and dissociation constants that are not 0: mol/L, and Pa. */
+const WORDS: Record<ConcentrationKind, string> = {
+  molar: '1e-15 to 1e3 M',
+  pressure: '1e-9 to 1e9 Pa',
 };
-
-/** so that 0.001 pM passes as 1e-15 M in spite of rounding; relative */
-const ROUNDING = 1e-12;
 
 export interface ConcentrationRange {
   lowest: number;
@@ -23,9 +21,14 @@ export interface ConcentrationRange {
 
 /** The range of concentrations that are not 0, in `unit`. */
 export function concentrationRange(unit: ConcentrationUnit): ConcentrationRange {
-  const { lowest, highest, words } = RANGES[concentrationKind(unit)];
+  const kind = concentrationKind(unit);
+  const [lowest, highest] = CONCENTRATION_RANGES[kind];
   const size = baseUnitsPer(unit);
-  return { lowest: (lowest / size) * (1 - ROUNDING), highest: (highest / size) * (1 + ROUNDING), words };
+  return {
+    lowest: (lowest / size) * (1 - RANGE_ROUNDING),
+    highest: (highest / size) * (1 + RANGE_ROUNDING),
+    words: WORDS[kind],
+  };
 }
 
 const KIND_WORDS: Record<ConcentrationKind, string> = {

@@ -64,6 +64,7 @@ function assessSeries(
   const { model, table } = scored;
   const q = seriesQ(scored);
   const { derived, notes } = deriveQuantities(dataset, model);
+  const { shape, notes: shapeNotes } = fitShape(dataset, series, scored);
   return {
     id: series.id,
     origin: series.parameters.origin,
@@ -72,9 +73,9 @@ function assessSeries(
     sites: model.sites.reduce((sum, n) => sum + n, 0),
     ...q,
     derived,
-    shape: fitShape(dataset, series, scored),
+    shape,
     conventions: findConventions(dataset, series, scored, q),
-    notes: [...notesOn(dataset, series, table), ...linearity, ...notes],
+    notes: [...notesOn(dataset, series, table), ...linearity, ...notes, ...shapeNotes],
     points,
   };
 }

@@ -24,6 +24,7 @@ export type NoteCode =
   | 'depletion'
   | 'derived-not-defined'
   | 'linear-uncertainty'
+  | 'shape-not-tried'
   | 'no-degrees-of-freedom'
   | 'normalisation'
   | 'protein-concentration-not-stated'

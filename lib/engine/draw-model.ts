@@ -12,6 +12,14 @@ import type { QuantityKind, UncertainQuantity } from './uncertain-quantities';
 /** A number of sites or a temperature never falls below this share of what is stated: none can be negative. */
 const LEAST_SHARE = 1e-3;
 
+/** Logarithms are drawn within this, so that products of what is drawn stay finite: e^150 is 1e65. */
+const LARGEST_LOGARITHM = 150;
+
+/** e^x, x taken within the bounds of what is drawn. */
+export function boundedExp(x: number): number {
+  return Math.exp(Math.min(LARGEST_LOGARITHM, Math.max(-LARGEST_LOGARITHM, x)));
+}
+
 export class DrawnModel {
   /** the model as drawn last; only what the energy needs of it */
   readonly model: SeriesModel;
@@ -88,11 +96,12 @@ export class DrawnModel {
     if (kind === 'gap') model.gapKT += by;
     else if (kind === 'gapPerSite') model.gapPerSite[place] += by;
     else if (kind === 'sites') model.sites[place] += by;
-    else if (kind === 'inactive') model.inverseInactive[place * model.ligandCount + ligand] *= Math.exp(-by);
-    else if (kind === 'active') model.inverseActive[place * model.ligandCount + ligand] *= Math.exp(-by);
+    else if (kind === 'inactive')
+      model.inverseInactive[place * model.ligandCount + ligand] *= boundedExp(-by);
+    else if (kind === 'active') model.inverseActive[place * model.ligandCount + ligand] *= boundedExp(-by);
     else if (kind === 'slope') model.slopes[place] += by;
     else if (kind === 'temperature') model.temperatureKelvin += by;
-    else this.stockFactor[ligand] *= Math.exp(by);
+    else this.stockFactor[ligand] *= boundedExp(by);
   }
 
   /** What was stated in kJ/mol, kcal/mol or meV is fewer kT at a higher temperature. */

@@ -5,7 +5,7 @@
  */
 import { energyStatementToKT, gapToKT, temperatureOf } from './convert-statements';
 import type { ConstantStatement, DatasetInput, SeriesInput } from './inputs';
-import { CONCENTRATION_RANGES, LARGEST_KT } from './stated-ranges';
+import { CONCENTRATION_RANGES, LARGEST_KT, LARGEST_NUMBER } from './stated-ranges';
 import { baseUnitsPer, type ConcentrationUnit, concentrationKind } from './units';
 
 /** How many values a refit fits at most. */
@@ -205,5 +205,5 @@ function spanOf(dataset: DatasetInput, places: readonly FreePlace[]): number {
     for (const { modulators } of points)
       span = Math.max(span, Math.abs((modulators?.[entry.modulator] ?? entry.reference) - entry.reference));
   }
-  return span || 1;
+  return span === 0 ? 1 : Math.max(span, LARGEST_KT / LARGEST_NUMBER);
 }

@@ -27,6 +27,8 @@ export interface LeastSquaresProblem {
 
 export interface LeastSquaresOptions {
   mostIterations?: number;
+  /** where Σ r² falls by less than this over 20 trial steps, the fit has converged as well; 0 where left out */
+  negligibleFall?: number;
   /** Called after each trial step; returning false ends the fit where it stands. */
   onIteration?: (state: IterationState) => boolean;
 }
@@ -56,21 +58,31 @@ const ROUNDING = 1e-12;
 /** Where the region is this small beside x, it has as well. */
 const STEP_TOLERANCE = 1e-15;
 const MOST_ITERATIONS = 1000;
+/** Over so many trial steps a negligible fall is one. */
+const FALL_ITERATIONS = 20;
 /** A step is taken where it reaches this share of what was promised. */
 const LEAST_RATIO = 1e-4;
 
 /** The x at which Σ r_i² is smallest, as far as a descent from `start` finds it. */
 export function minimiseLeastSquares(
   problem: LeastSquaresProblem,
-  { mostIterations = MOST_ITERATIONS, onIteration = () => true }: LeastSquaresOptions = {},
+  {
+    mostIterations = MOST_ITERATIONS,
+    negligibleFall = 0,
+    onIteration = () => true,
+  }: LeastSquaresOptions = {},
 ): LeastSquaresFit {
   const descent = new Descent(problem);
+  const sums = [descent.sumOfSquares];
   let iterations = 0;
   let converged = descent.sumOfSquares === 0;
   while (!converged && iterations < mostIterations) {
     converged = descent.step();
     iterations++;
     const { sumOfSquares, promised } = descent;
+    sums.push(sumOfSquares);
+    if (iterations >= FALL_ITERATIONS && sums[iterations - FALL_ITERATIONS] - sumOfSquares < negligibleFall)
+      converged = true;
     if (!onIteration({ iteration: iterations, sumOfSquares, promised })) break;
   }
   const { x, sumOfSquares, jacobian } = descent;

@@ -11,7 +11,7 @@
  */
 import type { Note } from './assessment';
 import { chooseCurvedPoints, LEAST_EXPECTED_U } from './curved-points';
-import { DrawnModel } from './draw-model';
+import { boundedExp, DrawnModel } from './draw-model';
 import { concentrationSlope, createSiteState, energyOf, occupySites } from './energy';
 import type { DatasetInput } from './inputs';
 import { logistic, logisticSlope } from './logistic';
@@ -26,8 +26,6 @@ const TRIALS = 2000;
 const SEED = 101;
 /** Where the two uncertainties differ by more than this, relative to the linear one, it is said. */
 const DISAGREEMENT = 0.05;
-/** What the luck of the draw may make of two that differ by just so much, relative: nine points in ten, over twenty seeds. */
-const TRIAL_NOISE = 0.0075;
 
 /** The two standard uncertainties of the expected activity at a point. */
 export interface UncertaintyPair {
@@ -109,7 +107,7 @@ function comparePoints(
     const offset = trial * width;
     drawn.draw(normals, offset);
     for (let l = 0; l < factors.length; l++)
-      factors[l] = drawn.stockFactor[l] * Math.exp(model.relativeU[l] * normals[offset + columns + l]);
+      factors[l] = drawn.stockFactor[l] * boundedExp(model.relativeU[l] * normals[offset + columns + l]);
     points.forEach((point, k) => {
       for (let l = 0; l < factors.length; l++) concentrations[l] = point.concentrations[l] * factors[l];
       occupySites(drawn.model, concentrations, 0, state);
@@ -163,7 +161,7 @@ function describe(off: readonly UncertaintyPair[], tried: number): Note {
 
 function disagrees({ linear, monteCarlo }: UncertaintyPair): boolean {
   if (Math.max(linear, monteCarlo) < LEAST_EXPECTED_U) return false;
-  return Math.abs(monteCarlo - linear) > (DISAGREEMENT + TRIAL_NOISE) * linear;
+  return Math.abs(monteCarlo - linear) > DISAGREEMENT * linear;
 }
 
 /** How far apart the two are, as a ratio either way. */

@@ -10,24 +10,33 @@
 /** Rows shorter than this, beside the longest, are rounding. */
 const ROUNDING = 1e-13;
 
+export interface NarrowOptions {
+  /** rows that are shorter than this may be left out as well, in the unit of W */
+  negligible?: number;
+  /** how many columns W′ may have at most */
+  mostColumns?: number;
+}
+
 /**
  * @param rows W, m × columns, row by row; it is read and never changed
- * @returns W′, m × rank, row by row
+ * @returns W′, m × rank, row by row; null where more than `mostColumns` are needed
  */
 export function narrowFactor(
   rows: Float64Array,
   m: number,
   columns: number,
-): { factor: Float64Array; rank: number } {
+  { negligible = 0, mostColumns = columns }: NarrowOptions = {},
+): { factor: Float64Array; rank: number } | null {
   const work = rows.slice();
   const reflection = new Float64Array(columns);
   const most = Math.min(m, columns);
   let rank = 0;
-  let shortest = 0;
+  let shortest = negligible;
   while (rank < most) {
     const pivot = longestRow(work, m, columns, rank);
-    if (rank === 0) shortest = ROUNDING * pivot.length;
+    if (rank === 0) shortest = Math.max(negligible, ROUNDING * pivot.length);
     if (pivot.length <= shortest) break;
+    if (rank === mostColumns) return null;
     reflectRows(work, m, columns, rank, pivot, reflection);
     rank++;
   }

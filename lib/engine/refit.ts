@@ -4,8 +4,7 @@
  *
  * A value is not determined by the data where it belongs to a direction beyond a condition number of 1e8 of the
  * scaled normal matrix, where it ended at a bound of its range, or where its standard error is above 1 in ln K or
- * ln n. For a gap the same bound is 1 kT (a gap is the ln of a ratio), for a slope 1 kT over the values of the
- * modulator that were measured.
+ * ln n.
  */
 import { uncertaintyOfFit } from './fit-uncertainty';
 import { type FreeParameter, type FreeParameterKind, type FreeValue, freeValues } from './free-parameters';
@@ -44,7 +43,7 @@ export interface RefitEstimate {
   unit: FreeValue['unit'];
   /** gaps and slopes: inactive − active */
   value: number;
-  /** standard error; null where not determined */
+  /** standard error; null where the points do not depend on the value, or it ended at a bound of its range */
   u: number | null;
   /** where the fit started: the stated value, or the mean (of K and n the geometric) of different ones */
   stated: number;
@@ -52,6 +51,7 @@ export interface RefitEstimate {
 }
 
 export interface RefitResult {
+  /** false also where the points respond to none of the values, so that nothing says where to go */
   converged: boolean;
   iterations: number;
   chiSquared: number;
@@ -66,10 +66,16 @@ export interface RefitResult {
 
 const MOST_ITERATIONS = 500;
 
+/** A fall of χ² over twenty steps that says nothing: values that still move then are not determined. */
+const NEGLIGIBLE_FALL = 1e-6;
+
+/** Where one step of a value, 1 in ln or 1 kT, changes the weighted residuals by less than this, they do not respond to it. */
+const LEAST_RESPONSE = 1e-6;
+
 /** By how many of its own steps (1 in ln, 1 kT) a variable may move in one iteration. */
 const MOST_STEPS = 3;
 
-/** Standard error, in its own steps, beyond which a value is not determined. */
+/** Standard error of ln K or ln n beyond which a value is not determined. */
 const MOST_UNCERTAIN = 1;
 
 /**
@@ -96,7 +102,11 @@ export function refit(
       residuals: (x, out) => model.writeResiduals(x, out),
       jacobian: (x, out) => model.writeJacobian(x, out),
     },
-    { mostIterations: options.mostIterations ?? MOST_ITERATIONS, onIteration: reporter(options) },
+    {
+      mostIterations: options.mostIterations ?? MOST_ITERATIONS,
+      negligibleFall: NEGLIGIBLE_FALL,
+      onIteration: reporter(options),
+    },
   );
   return resultOf(values, fit, model.count);
 }
@@ -127,7 +137,7 @@ function resultOf(values: readonly FreeValue[], fit: LeastSquaresFit, points: nu
   );
   const degreesOfFreedom = Math.max(0, points - values.length);
   return {
-    converged: fit.converged,
+    converged: fit.converged && (fit.sumOfSquares === 0 || pointsRespond(values, fit.jacobian)),
     iterations: fit.iterations,
     chiSquared: fit.sumOfSquares,
     degreesOfFreedom,
@@ -135,6 +145,14 @@ function resultOf(values: readonly FreeValue[], fit: LeastSquaresFit, points: nu
     estimates: values.map((value, j) => estimateOf(value, fit.x[j], standardErrors[j], entangled[j])),
     correlations,
   };
+}
+
+/** Whether the points depend on any of the values there. */
+function pointsRespond(values: readonly FreeValue[], jacobian: Float64Array): boolean {
+  return (
+    values.length === 0 ||
+    jacobian.some((slope, at) => Math.abs(slope * values[at % values.length].step) >= LEAST_RESPONSE)
+  );
 }
 
 function estimateOf(
@@ -147,7 +165,9 @@ function estimateOf(
   // Where nothing moved it, the value stays as stated, without the rounding of ln and exp.
   const moved = value.logarithmic ? Math.exp(x) / value.factor : x;
   const estimate = x === startOf(value) ? value.stated : moved;
-  const determined = standardError !== null && !entangled && standardError <= MOST_UNCERTAIN * value.step;
+  // A gap counts as not determined only where the points do not respond to it at all.
+  const widest = value.logarithmic ? MOST_UNCERTAIN : value.step / LEAST_RESPONSE;
+  const u = standardError === null ? null : standardError * (value.logarithmic ? estimate : 1);
   return {
     series: value.series,
     parameter,
@@ -156,8 +176,8 @@ function estimateOf(
     modulator,
     unit: value.unit,
     value: estimate,
-    u: determined ? standardError * (value.logarithmic ? estimate : 1) : null,
+    u: u !== null && Number.isFinite(u) ? u : null,
     stated: value.stated,
-    determined,
+    determined: standardError !== null && !entangled && standardError <= widest,
   };
 }

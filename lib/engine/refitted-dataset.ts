@@ -8,6 +8,7 @@ import type {
   SiteClassInput,
 } from './inputs';
 import type { RefitEstimate, RefitResult } from './refit';
+import { LARGEST_KT, LARGEST_RELATIVE_U, MOST_CORRELATIONS } from './stated-ranges';
 import type { ConcentrationUnit } from './units';
 
 type Fitted = Pick<RefitResult, 'estimates' | 'correlations'>;
@@ -18,9 +19,6 @@ interface Placed {
   estimate: RefitEstimate;
   label: string | undefined;
 }
-
-/** More are not taken in a document. */
-const MOST_CORRELATIONS = 500;
 
 /**
  * A copy of a dataset in which the series that were fitted state the estimates: gaps in kT, inactive − active;
@@ -119,8 +117,15 @@ function correlationsOf(placed: readonly Placed[], matrix: Fitted['correlations'
   );
 }
 
+/** The standard error as a document may state it; null where the value is not determined, or beyond what it may. */
+function statableU({ determined, u, unit, value }: RefitEstimate): number | null {
+  if (!determined || u === null) return null;
+  return u <= (unit === 'kT' ? LARGEST_KT : LARGEST_RELATIVE_U * value) ? u : null;
+}
+
 function withEstimate(parameters: ParametersInput, { estimate, label }: Placed): ParametersInput {
-  const { parameter, siteClass, value, u, unit } = estimate;
+  const { parameter, siteClass, value, unit } = estimate;
+  const u = statableU(estimate);
   const statement = {
     value,
     ...(u === null ? {} : { u }),

@@ -1,13 +1,11 @@
 /** Small steps that several readings of a series share. */
 import type { CorrelationInput, ParametersInput, SeriesInput } from './inputs';
+import { MOST_CORRELATIONS } from './stated-ranges';
 
 /** The series with other parameters; all else passes through. */
 export function withParameters<S extends SeriesInput>(series: S, changes: Partial<ParametersInput>): S {
   return { ...series, parameters: { ...series.parameters, ...changes } };
 }
-
-/** Most correlations that a series may state. */
-const MOST_CORRELATIONS = 500;
 
 /**
  * Correlations under the new names of their quantities, for a spread into parameters.

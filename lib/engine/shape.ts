@@ -7,13 +7,20 @@
  *
  * Source: Akaike, IEEE Trans. Autom. Control 19, 716 (1974).
  */
-import type { Shape, ShapeAlternative, ShapeEstimate, ShapeEstimateName, ShapeKind } from './assessment';
+import type {
+  Note,
+  Shape,
+  ShapeAlternative,
+  ShapeEstimate,
+  ShapeEstimateName,
+  ShapeKind,
+} from './assessment';
 import { fitLeastSquares, type Noise } from './generalised-least-squares';
 import type { DatasetInput, SeriesInput } from './inputs';
-import { narrowFactor } from './narrow-factor';
 import type { ScoredSeries } from './q-statistic';
 import { AS_STATED, type Bend, BentCurve } from './shape-curve';
 import { type EnergyRows, meanStatedU, SeriesEnergies } from './shape-energies';
+import { mayRestock, mostShapeColumns, narrowRows, noteShapesLeftOut, withoutGradient } from './shape-work';
 
 /** An alternative is named from this much AIC below the statements on. */
 const NAMED_BELOW = -8;
@@ -34,6 +41,9 @@ const ALTERNATIVES: Readonly<Record<ShapeKind, readonly ShapeEstimateName[]>> = 
   'floor+ceiling': ['floor', 'ceiling'],
 };
 
+/** At another stock, gradients of so many columns are taken as they are. */
+const CARRIED_COLUMNS = 24;
+
 /** Longest step of a fit: kT for the offset, of ln α for the stock. */
 const LONGEST_STEP: Bend = { offset: 2, slope: 0.5, ceiling: 1, floor: 1, stock: 1 };
 
@@ -48,37 +58,50 @@ interface Subject {
   noiseAsStated: Noise;
   aicAsStated: number;
   fittedHere: boolean;
+  mostColumns: number;
 }
 
 /**
  * The shape of a series.
  *
  * @param scored the same series, with its model and table
- * @returns alternatives that the points determine, lowest AIC first; energies in kT
+ * @returns alternatives that the points determine, lowest AIC first; energies in kT; and a note where some were
+ *   left out, since there is too much to compute
  */
-export function fitShape(dataset: DatasetInput, series: SeriesInput, scored: ScoredSeries): Shape {
+export function fitShape(
+  dataset: DatasetInput,
+  series: SeriesInput,
+  scored: ScoredSeries,
+): { shape: Shape; notes: Note[] } {
   const energies = new SeriesEnergies(dataset, series, scored.model);
   const asWritten = energies.at(1);
-  const subject = prepare(scored, energies, asWritten);
-  const alternatives: ShapeAlternative[] = [];
-  for (const [kind, free] of Object.entries(ALTERNATIVES) as [ShapeKind, readonly ShapeEstimateName[]][]) {
-    if (scored.table.count < free.length + SPARE_POINTS) continue;
-    if (kind === 'stock' && !energies.hasOneLigand()) continue;
-    const alternative = fitAlternative(subject, kind, free);
-    if (alternative) alternatives.push(alternative);
+  const allowedByStatements = meanStatedU(asWritten);
+  const subject = prepare(scored, energies, asWritten, mostShapeColumns(dataset));
+  if (subject === null) {
+    return {
+      shape: { best: 'none', allowedByStatements, alternatives: [] },
+      notes: [noteShapesLeftOut('all')],
+    };
   }
-  alternatives.sort((a, b) => a.deltaAIC - b.deltaAIC);
+  const restocks = mayRestock(dataset, scored.model, subject.stated.rank);
+  const alternatives = fitAlternatives(subject, scored.table.count, restocks);
   const named = alternatives.length > 0 && alternatives[0].deltaAIC <= NAMED_BELOW;
   return {
-    best: named ? alternatives[0].kind : 'none',
-    allowedByStatements: meanStatedU(asWritten),
-    alternatives,
+    shape: { best: named ? alternatives[0].kind : 'none', allowedByStatements, alternatives },
+    notes: restocks || !energies.hasOneLigand() ? [] : [noteShapesLeftOut('stock')],
   };
 }
 
-function prepare({ table, fittedHere }: ScoredSeries, energies: SeriesEnergies, rows: EnergyRows): Subject {
+/** What the fits share, or null where the statements have too many independent directions. */
+function prepare(
+  { table, fittedHere }: ScoredSeries,
+  energies: SeriesEnergies,
+  rows: EnergyRows,
+  mostColumns: number,
+): Subject | null {
   const variance = table.activityU.map((u) => u * u + table.modelFloor ** 2);
-  const stated = fittedHere ? withoutParameters(rows) : narrowed(rows);
+  const stated = fittedHere ? withoutGradient(rows) : narrowRows(rows, mostColumns);
+  if (stated === null) return null;
   const { residual, noise } = new BentCurve(table.activity, variance).bend(stated, AS_STATED, []);
   const noiseAsStated = noise();
   return {
@@ -89,17 +112,19 @@ function prepare({ table, fittedHere }: ScoredSeries, energies: SeriesEnergies, 
     noiseAsStated,
     aicAsStated: noiseAsStated.quadraticForm(residual) + noiseAsStated.logDeterminant(),
     fittedHere,
+    mostColumns,
   };
 }
 
-/** In a series fitted to its own points C is the diagonal alone. */
-function withoutParameters(rows: EnergyRows): EnergyRows {
-  return { ...rows, gradient: new Float64Array(0), rank: 0 };
-}
-
-function narrowed(rows: EnergyRows): EnergyRows {
-  const { factor, rank } = narrowFactor(rows.gradient, rows.energy.length, rows.rank);
-  return { ...rows, gradient: factor, rank };
+function fitAlternatives(subject: Subject, points: number, restocks: boolean): ShapeAlternative[] {
+  const alternatives: ShapeAlternative[] = [];
+  for (const [kind, free] of Object.entries(ALTERNATIVES) as [ShapeKind, readonly ShapeEstimateName[]][]) {
+    if (points < free.length + SPARE_POINTS) continue;
+    if (kind === 'stock' && !(restocks && subject.energies.hasOneLigand())) continue;
+    const alternative = fitAlternative(subject, kind, free);
+    if (alternative) alternatives.push(alternative);
+  }
+  return alternatives.sort((a, b) => a.deltaAIC - b.deltaAIC);
 }
 
 function fitAlternative(
@@ -127,7 +152,10 @@ function fitAlternative(
 function rowsAt(subject: Subject, { stock }: Bend): EnergyRows {
   if (stock === 1) return subject.stated;
   subject.restocked = subject.energies.at(stock, subject.restocked);
-  return subject.fittedHere ? withoutParameters(subject.restocked) : subject.restocked;
+  if (subject.fittedHere) return withoutGradient(subject.restocked);
+  // Few columns are dearer to narrow than to carry along.
+  if (subject.restocked.rank <= CARRIED_COLUMNS) return subject.restocked;
+  return narrowRows(subject.restocked, subject.mostColumns) ?? subject.restocked;
 }
 
 /** A stock is fitted in its logarithm, so that it stays positive; the rest as it is. */

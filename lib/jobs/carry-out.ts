@@ -2,9 +2,9 @@
 import { write } from '@/db/client';
 import { deleteHeldJob, extendLease, type HeldJob, letGoOfJob } from '@/db/queries/jobs';
 import { log } from '@/lib/log';
-import type { Finish, JobHandler } from './job-kinds';
+import { type Finish, type JobHandler, NoRoom } from './job-kinds';
 import { type StopReason, whileUnderWay } from './jobs-under-way';
-import { HEARTBEAT_MS, LEASE_MS, pauseAfter } from './lease';
+import { HEARTBEAT_MS, LEASE_MS, NO_ROOM_PAUSE_MS, pauseAfter } from './lease';
 
 /** Of an error, as much is kept as helps to understand it. */
 const MOST_ERROR_LENGTH = 2_000;
@@ -17,13 +17,14 @@ const MOST_ERROR_LENGTH = 2_000;
 export function carryOut(
   job: HeldJob,
   handler: JobHandler,
-  run: (signal: AbortSignal) => Promise<Finish> = (signal) => handler.run(JSON.parse(job.payload), signal),
+  run?: (signal: AbortSignal) => Promise<Finish>,
 ): Promise<void> {
-  return whileUnderWay(job.id, async (stop) => {
-    const heart = beat(job, stop);
+  return whileUnderWay(job.id, run ? 'call' : 'runner', async (stop) => {
+    const heart = beat(job, handler, stop);
     try {
       if (job.attempts > handler.mostAttempts) throw new Error('The process that was at work on it ended.');
-      const finish = await run(stop.signal);
+      const payload = JSON.parse(job.payload);
+      const finish = await (run ? run(stop.signal) : handler.run(payload, stop.signal));
       await write('acknowledged', async (tx) => {
         if (await deleteHeldJob(tx, job)) await finish(tx);
       });
@@ -39,10 +40,11 @@ export function carryOut(
 }
 
 /** Signs of life while the work goes on; where the job is no longer held, the work is stopped. */
-function beat(job: HeldJob, stop: AbortController): NodeJS.Timeout {
+function beat(job: HeldJob, handler: JobHandler, stop: AbortController): NodeJS.Timeout {
   const once = async () => {
     const held = await extendLease(job, Date.now() + LEASE_MS);
-    if (!held) stop.abort('lost' satisfies StopReason);
+    if (held) await handler.onBeat?.(JSON.parse(job.payload));
+    else stop.abort('lost' satisfies StopReason);
   };
   const heart = setInterval(() => {
     once().catch((error: unknown) => log().error({ err: error, job: job.id }, 'a job gave no sign of life'));
@@ -57,7 +59,8 @@ async function noteFailure(
   error: unknown,
 ): Promise<void> {
   if (signal.reason === ('lost' satisfies StopReason)) return;
-  if (signal.reason === ('process-ends' satisfies StopReason)) return handBack(job);
+  if (signal.reason === ('process-ends' satisfies StopReason)) return handBack(job, 0);
+  if (error instanceof NoRoom) return handBack(job, NO_ROOM_PAUSE_MS);
   const lastError = String(error instanceof Error ? error.stack : error).slice(0, MOST_ERROR_LENGTH);
   const givenUp = job.attempts >= handler.mostAttempts;
   const { id, kind, attempts } = job;
@@ -70,9 +73,9 @@ async function noteFailure(
   });
 }
 
-/** Not the job's fault: the attempt does not count, and the next process begins it at once. */
-async function handBack(job: HeldJob): Promise<void> {
+/** Not the job's fault: the attempt does not count, and whoever is free begins it after the pause. */
+async function handBack(job: HeldJob, pauseMs: number): Promise<void> {
   await write('acknowledged', async (tx) => {
-    await letGoOfJob(tx, job, { attempts: job.attempts - 1 });
+    await letGoOfJob(tx, job, { attempts: job.attempts - 1, runAt: Date.now() + pauseMs });
   });
 }

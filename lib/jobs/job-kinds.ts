@@ -12,6 +12,9 @@ export type JobKind = keyof JobPayloads;
 /** What a job writes at its end, in the transaction that ends it: either both are on the disk, or neither. */
 export type Finish = (tx: Transaction) => Promise<void>;
 
+/** Thrown by a handler that finds no room for the work now: the attempt does not count. */
+export class NoRoom extends Error {}
+
 /**
  * How a kind of job is done. A job may be begun more than once, where a process died over it or lost it, but only one
  * attempt ends it: what goes out beyond the database must bear being done twice.
@@ -21,6 +24,8 @@ export interface JobHandler<K extends JobKind = JobKind> {
   mostAttempts: number;
   /** Does the work. Where `signal` aborts, the job is no longer this process's: stop, and throw. */
   run: (payload: JobPayloads[K], signal: AbortSignal) => Promise<Finish>;
+  /** done with each sign of life, so that what the job holds beside itself does not run out */
+  onBeat?: (payload: JobPayloads[K]) => Promise<void>;
   /** what is written where the job is given up */
   giveUp?: (payload: JobPayloads[K]) => Finish;
 }

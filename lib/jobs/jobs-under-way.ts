@@ -2,6 +2,7 @@
 
 interface UnderWay {
   id: string;
+  begunBy: BegunBy;
   stop: AbortController;
   ended: Promise<void>;
 }
@@ -13,18 +14,22 @@ const KEY = Symbol.for('curvekeep.jobs-under-way');
 // Next bundles route handlers apart from the server, which must let go of their jobs as well.
 const shared = globalThis as typeof globalThis & { [KEY]?: Set<UnderWay> };
 
-/** How many there are. */
-export function countJobsUnderWay(): number {
-  return all().size;
+/** Whether work on a job was begun by a call, or by the runner that found it due. */
+export type BegunBy = 'call' | 'runner';
+
+/** How many of them the runner began. */
+export function countJobsOfRunner(): number {
+  return [...all()].filter(({ begunBy }) => begunBy === 'runner').length;
 }
 
 /** Does `work` on the job of that id as one of them. */
 export async function whileUnderWay(
   id: string,
+  begunBy: BegunBy,
   work: (stop: AbortController) => Promise<void>,
 ): Promise<void> {
   const stop = new AbortController();
-  const entry = { id, stop, ended: work(stop) };
+  const entry = { id, begunBy, stop, ended: work(stop) };
   all().add(entry);
   try {
     await entry.ended;

@@ -4,11 +4,19 @@ import { forgetEndedSessions } from '@/lib/auth/session';
 import { publishDue } from '@/lib/curation/publish-due';
 import { sweepObjects } from '@/lib/deposits/loose-objects';
 import { log } from '@/lib/log';
+import { forgetExpiredRefits } from '@/lib/refits/forget-refits';
+import { forgetGivenUpJobs } from './forget-given-up';
 
 /** Milliseconds between the end of one round and the beginning of the next. */
 const PAUSE_MS = 60_000;
 
-const CHORES: Record<string, () => Promise<unknown>> = { publishDue, sweepObjects, forgetEndedSessions };
+const CHORES: Record<string, () => Promise<unknown>> = {
+  publishDue,
+  sweepObjects,
+  forgetEndedSessions,
+  forgetExpiredRefits,
+  forgetGivenUpJobs,
+};
 
 /** Begins with them; `stop` waits for the chore under way. */
 export function startChores(pauseMs = PAUSE_MS): { stop: () => Promise<void> } {

@@ -3,23 +3,16 @@ import { randomUUID } from 'node:crypto';
 import { claimDueJob, hasDueJob } from '@/db/queries/jobs';
 import { log } from '@/lib/log';
 import { carryOut } from './carry-out';
-import type { JobHandler, JobHandlers, JobKind } from './job-kinds';
-import { countJobsUnderWay, stopJobsUnderWay } from './jobs-under-way';
+import type { JobHandlers, JobKind } from './job-kinds';
+import { countJobsOfRunner, stopJobsUnderWay } from './jobs-under-way';
 import { LEASE_MS } from './lease';
 
 /** How often it is looked, and after a failure, ms. */
 const LOOK_MS = 500;
 const LOOK_AFTER_FAILURE_MS = 5_000;
 
+/** Work that a call began is not counted: however much there is, jobs that wait are begun. */
 const MOST_AT_ONCE = 4;
-
-/** For a kind that this version does not know; another process may. */
-const NO_HANDLER: JobHandler = {
-  mostAttempts: 5,
-  run: async () => {
-    throw new Error('There is no handler for jobs of this kind.');
-  },
-};
 
 export interface JobRunner {
   /** Takes no further job, lets go of those under way, and resolves then. */
@@ -60,11 +53,14 @@ export function runJobs(handlers: JobHandlers): JobRunner {
 /** Begins the job that has waited longest; false where there is none, or enough is under way. */
 async function beginDueJob(handlers: JobHandlers): Promise<boolean> {
   const now = Date.now();
-  if (countJobsUnderWay() >= MOST_AT_ONCE || !(await hasDueJob(now))) return false;
-  const job = await claimDueJob(randomUUID(), now, now + LEASE_MS);
+  // Other kinds are left to processes of a version that knows them.
+  const kinds = Object.keys(handlers);
+  if (countJobsOfRunner() >= MOST_AT_ONCE || !(await hasDueJob(kinds, now))) return false;
+  const job = await claimDueJob(kinds, randomUUID(), now, now + LEASE_MS);
   if (job === null) return false;
-  const handler = (handlers[job.kind as JobKind] as JobHandler | undefined) ?? NO_HANDLER;
   // Not awaited: it ends by itself, and never throws.
-  carryOut(job, handler).catch((error: unknown) => log().error({ err: error }, 'a job failed'));
+  carryOut(job, handlers[job.kind as JobKind]).catch((error: unknown) =>
+    log().error({ err: error }, 'a job failed'),
+  );
   return true;
 }

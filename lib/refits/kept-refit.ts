@@ -1,7 +1,7 @@
 /** A refit that outlives its call: how its progress and its answer come to stand where they are asked for. */
 import { deleteLease } from '@/db/queries/computation-limits';
 import { updateRefitAnswer, updateRefitProgress } from '@/db/queries/refits';
-import type { Finish } from '@/lib/jobs/job-kinds';
+import { type Finish, NoRoom } from '@/lib/jobs/job-kinds';
 import { log } from '@/lib/log';
 import { problemAnswer, type RefitAnswer } from './refit-body';
 import { MOST_REFIT_MS, type RefitComputation } from './refit-pool';
@@ -40,8 +40,8 @@ export function finishOf(
   { id, leaseId }: { id: string; leaseId: string },
   computed: RefitComputation,
 ): Finish {
-  if (computed.kind === 'busy' || computed.kind === 'aborted')
-    throw new Error(`The refit ended without an answer: ${computed.kind}.`);
+  if (computed.kind === 'busy') throw new NoRoom('Too many refits wait already.');
+  if (computed.kind === 'aborted') throw new Error('The refit was stopped before it had an answer.');
   return keepAnswer(id, leaseId, computed.kind === 'answered' ? computed : tookTooLong());
 }
 

@@ -1,8 +1,10 @@
 /** A refit that another process began and did not end: it is begun anew from what was sent. */
-import { selectRefit, updateRefitAnswer } from '@/db/queries/refits';
+import { deleteLease } from '@/db/queries/computation-limits';
+import { renewLeaseOfRefit, selectRefit, updateRefitAnswer } from '@/db/queries/refits';
 import type { Finish, JobHandler } from '@/lib/jobs/job-kinds';
 import { finishOf, keepingProgress } from './kept-refit';
 import { problemAnswer } from './refit-body';
+import { REFIT_PLACE_MS } from './refit-limits';
 import { refitInPool } from './refit-pool';
 
 const nothing: Finish = async () => undefined;
@@ -23,8 +25,12 @@ export const refitJob: JobHandler<'refit'> = {
     );
     return finishOf(refit, await keepingProgress(refitId, () => progress, computing));
   },
+  onBeat: ({ refitId }) => renewLeaseOfRefit(refitId, Date.now() + REFIT_PLACE_MS),
   giveUp: ({ refitId }) => {
-    const { status, body } = problemAnswer({ code: 'unexpected' });
-    return async (tx) => updateRefitAnswer(tx, refitId, { status, body });
+    const answer = problemAnswer({ code: 'unexpected' });
+    return async (tx) => {
+      const leaseId = await updateRefitAnswer(tx, refitId, answer);
+      if (leaseId !== null) await deleteLease(tx, leaseId);
+    };
   },
 };

@@ -2,8 +2,8 @@
 import type { ComputationLimits } from '@/lib/assessments/computation-limits';
 
 /**
- * Longer than a refit can take (a minute for its body, one to compute, and the time that another process needs to
- * take it over): after it a place is a dead process's.
+ * Longer than a refit may go without a sign of life (a minute for its body, and the time that another process needs to
+ * take it over; one that goes on as a job renews its place with each sign): after it a place is a dead process's.
  */
 export const REFIT_PLACE_MS = 240_000;
 

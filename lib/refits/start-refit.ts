@@ -137,7 +137,7 @@ async function goOn({ sent, lease, computing, stop, progress }: Going): Promise<
   const job = await write('acknowledged', async (tx) => {
     const started = await enqueueStartedJob(tx, 'refit', { refitId: id });
     const row = { id, body: Buffer.from(sent), progress: progress(), leaseId: lease.id, jobId: started.id };
-    await insertRefit(tx, { ...row, expiresAt: now + KEPT_MS }, now);
+    await insertRefit(tx, { ...row, expiresAt: now + KEPT_MS });
     return started;
   });
   carryOut(job, refitJob, async (signal) => {

@@ -44,7 +44,7 @@ it('refuses more derivatives than fit in memory', () => {
   expect(errors).toContainEqual({
     pointer: '/series',
     detail: expect.stringContaining(
-      'at most 8,000,000 derivatives (points × uncertain quantities) are computed',
+      'at most 4,000,000 derivatives (points × uncertain quantities) are computed',
     ),
   });
   expect(errors).toContainEqual({
