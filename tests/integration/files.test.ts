@@ -106,13 +106,6 @@ describe('a file', () => {
     expect(back.headers.get('content-disposition')).toMatch(/^attachment; /);
   });
 
-  it('may be empty', async () => {
-    const attached = await send('empty.txt', new Uint8Array());
-    const { links, size } = fileSchema.parse(await attached.json());
-    expect(size).toBe(0);
-    expect(await (await fetch(`${app.url}${links.self}`, { headers: token })).text()).toBe('');
-  });
-
   it('whose bytes are not those declared is refused and not kept', async () => {
     for (const header of ['Content-Digest', 'Repr-Digest']) {
       const refused = await send('wrong.txt', 'changed on the way', { [header]: digest('as it was') });

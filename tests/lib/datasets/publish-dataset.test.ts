@@ -139,6 +139,17 @@ describe('a published dataset', { timeout: 60_000 }, () => {
     expect(offCurve.length).toBeGreaterThan(5);
   });
 
+  it('has names that the database gives back whole', async () => {
+    const document = { ...exampleDocument(), title: 'Before\u0000after' };
+    const [series] = document.series as { label: string; variant: string }[];
+    Object.assign(series, { label: 'wild\u0000type', variant: 'W\u0001T' });
+    const { accession } = await published(document);
+    const { dataset, series: rows } = await rowsOf(accession);
+    expect(dataset?.title).toBe('Before after');
+    expect(rows).toMatchObject([{ label: 'wild type', variant: 'W T' }]);
+    expect(JSON.parse(dataset?.strip ?? '').energy).toHaveLength(2);
+  });
+
   it('of 20,000 points is written within a second or two', async () => {
     const document = exampleDocument({ series: 200, pointsPerSeries: 100, seed: 9 });
     const parsed = parseDocument(JSON.stringify(document));

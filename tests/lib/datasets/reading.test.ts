@@ -7,6 +7,7 @@ import { write } from '@/db/client';
 import { selectCollectionVersion } from '@/db/queries/datasets';
 import { loadScenario } from '@/db/seed/load-scenario';
 import { makeDocuments } from '@/db/seed/make-documents';
+import { datasets } from '@/db/tables/datasets';
 import { laboratories } from '@/db/tables/laboratories';
 import { VISITOR } from '@/lib/auth/actor';
 import { formatAccession } from '@/lib/datasets/accession';
@@ -276,6 +277,26 @@ describe('systems and laboratories', () => {
     expect(names).toEqual([...names].sort());
     expect(new Set(names).size).toBe(4);
     expect(second.next).toBeNull();
+  });
+});
+
+describe('strips', () => {
+  it('are those that were drawn at publication, and drawn anew where none was kept', async () => {
+    const kept = await list('');
+    await write('acknowledged', async (tx) => {
+      await tx.update(datasets).set({ strip: null });
+    });
+    expect(await list('')).toEqual(kept);
+    const mark = { energy: [1], z: [0], flag: ['on-curve' as const] };
+    await write('acknowledged', async (tx) => {
+      await tx.update(datasets).set({ strip: JSON.stringify(mark) });
+    });
+    expect((await list('')).datasets.map(({ strip }) => strip)).toEqual(kept.datasets.map(() => mark));
+    // A window cuts strips; those are drawn from the numbers.
+    expect((await list('from=0&to=4')).datasets.map(({ strip }) => strip)).not.toContainEqual(mark);
+    await write('acknowledged', async (tx) => {
+      await tx.update(datasets).set({ strip: null });
+    });
   });
 });
 
