@@ -101,7 +101,8 @@ describe('signing in', () => {
       email: 'manager@demo.example',
       password: PASSWORD,
     });
-    expect(new URL(response.headers.get('location') ?? '', app.url).href).toBe(`${app.url}/`);
+    // The sign-in page leads whoever wanted to be nowhere to where their work waits.
+    expect(new URL(response.headers.get('location') ?? '', app.url).href).toBe(`${app.url}/sign-in`);
   });
 
   it('answers alike for a wrong password and an unknown address, and sets no cookie', async () => {

@@ -1,5 +1,9 @@
+import type { Metadata } from 'next';
 import { DeadEnd } from '@/components/layout/dead-end';
 import { ActionLink } from '@/components/ui/action-link';
+
+// Next takes what the page itself says only where it is there.
+export const metadata: Metadata = { title: 'There is no such dataset' };
 
 export default function NoSuchDataset() {
   return (

@@ -23,10 +23,8 @@ const datasetOf = cache(async (accession: string) => loadDataset(await actorOfPa
 
 export async function generateMetadata({ params }: PageProps): Promise<Metadata> {
   const outcome = await datasetOf((await params).accession);
-  if (!outcome.ok) {
-    const title = outcome.tombstone ? 'Withdrawn dataset' : 'There is no such dataset';
-    return { title, robots: { index: false } };
-  }
+  // Of one that is not there, the title is in not-found.tsx.
+  if (!outcome.ok) return { title: 'Withdrawn dataset', robots: { index: false } };
   const { accession, title, lab, links, newest } = outcome.dataset;
   return {
     title: `${accession} ${title}`,

@@ -21,9 +21,7 @@ const labOf = cache(async (slug: string) => {
 
 export async function generateMetadata({ params }: LabPageProps): Promise<Metadata> {
   const lab = await labOf((await params).slug);
-  return lab
-    ? { title: lab.name, description: `Published datasets of ${lab.name}.` }
-    : { title: 'There is no such laboratory', robots: { index: false } };
+  return lab ? { title: lab.name, description: `Published datasets of ${lab.name}.` } : {};
 }
 
 /** What a laboratory published, on one curve. */
