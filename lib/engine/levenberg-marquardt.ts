@@ -2,7 +2,7 @@
  * Nonlinear least squares by the method of Levenberg and Marquardt with a trust region, scaled by the largest
  * columns seen, on orthogonal factors of the Jacobian (no normal matrix), within bounds.
  *
- * Source: Moré, Lecture Notes in Mathematics 630, 105 (1978), whose rules for the region, the scaling and the
+ * Source: Moré, in: Numerical Analysis, Dundee 1977, LNM 630 (Springer), 105 (1978), whose rules for the region, the scaling and the
  * end these are; Nocedal & Wright, Numerical Optimization, 2nd ed., section 10.3, and 16.7 for the projection
  * on bounds.
  */

@@ -3,7 +3,7 @@
  * |r + J·p| smallest. The damping λ ≥ 0 that belongs to Δ is found from the singular values of J·D⁻¹, where its
  * equation is a sum of n terms.
  *
- * Source: Moré, Lecture Notes in Mathematics 630, 105 (1978), sections 2 and 5; Nocedal & Wright, Numerical
+ * Source: Moré, in: Numerical Analysis, Dundee 1977, LNM 630 (Springer), 105 (1978), sections 2 and 5; Nocedal & Wright, Numerical
  * Optimization, 2nd ed., section 10.3 and algorithm 4.3.
  */
 import { normOf, type SingularFactors, singularFactors, type Triangle } from './orthogonal-factors';
