@@ -1,9 +1,9 @@
 /** The worker threads that compute, one pool a process, started when first needed. */
 import { availableParallelism } from 'node:os';
-import path from 'node:path';
 import { Piscina } from 'piscina';
 import type { BodyAnswer } from './assess-body';
 import type { WorkerAnswer, WorkerTask } from './assessment-worker';
+import { threadOptions } from './thread-options';
 
 /** One core stays free for the thread that answers pages; more than eight threads would only crowd the memory. */
 const THREADS = Math.min(8, Math.max(1, availableParallelism() - 1));
@@ -16,9 +16,6 @@ const MOST_MS = 30_000;
 
 /** Longest time that a sign of life may take. */
 const PING_MS = 3_000;
-
-/** Heap of one thread: enough for the largest body many times over, and a bound where a document is made to hurt. */
-const HEAP_MIB = 1024;
 
 export type ComputationOutcome =
   | BodyAnswer
@@ -78,15 +75,8 @@ export async function closeAssessmentPool(): Promise<void> {
 }
 
 function pool(): Pool {
-  shared[KEY] ??= new Piscina<WorkerTask, WorkerAnswer>({
-    filename: path.resolve(/* turbopackIgnore: true */ '.build/assessment-worker.js'),
-    minThreads: 1,
-    maxThreads: THREADS,
-    maxQueue: MOST_WAITING,
-    idleTimeout: 30_000,
-    // The bundle is plain JavaScript; a loader of the parent process would only slow the start of a thread.
-    execArgv: [],
-    resourceLimits: { maxOldGenerationSizeMb: HEAP_MIB },
-  });
+  shared[KEY] ??= new Piscina<WorkerTask, WorkerAnswer>(
+    threadOptions('assessment-worker', THREADS, MOST_WAITING),
+  );
   return shared[KEY];
 }

@@ -21,3 +21,15 @@ export function limitHeaders(quota: Quota): Record<string, string> {
     ].join(', '),
   };
 }
+
+/** The headers of an outcome: its limits where they are known, and when to try again where that helps. */
+export function outcomeHeaders(outcome: {
+  quota: Quota | null;
+  retryAfterSeconds?: number;
+}): Record<string, string> {
+  const { quota, retryAfterSeconds } = outcome;
+  return {
+    ...(quota ? limitHeaders(quota) : {}),
+    ...(retryAfterSeconds === undefined ? {} : { 'Retry-After': String(retryAfterSeconds) }),
+  };
+}

@@ -3,9 +3,9 @@
  * a minute, which no assessment is to wait for.
  */
 import { availableParallelism } from 'node:os';
-import path from 'node:path';
 import { MessageChannel } from 'node:worker_threads';
 import { Piscina } from 'piscina';
+import { threadOptions } from '@/lib/assessments/thread-options';
 import type { RefitAnswer } from './refit-body';
 import type { RefitTask } from './refit-worker';
 
@@ -17,9 +17,6 @@ const MOST_WAITING = 16;
 
 /** Longest time that a refit may take from when it begins. */
 export const MOST_REFIT_MS = 60_000;
-
-/** Heap of one thread: enough for the largest body many times over, and a bound where a document is made to hurt. */
-const HEAP_MIB = 1024;
 
 export type RefitComputation =
   | ({ kind: 'answered' } & RefitAnswer)
@@ -75,15 +72,6 @@ export async function closeRefitPool(): Promise<void> {
 }
 
 function pool(): Pool {
-  shared[KEY] ??= new Piscina<RefitTask, RefitAnswer>({
-    filename: path.resolve(/* turbopackIgnore: true */ '.build/refit-worker.js'),
-    minThreads: 1,
-    maxThreads: THREADS,
-    maxQueue: MOST_WAITING,
-    idleTimeout: 30_000,
-    // The bundle is plain JavaScript; a loader of the parent process would only slow the start of a thread.
-    execArgv: [],
-    resourceLimits: { maxOldGenerationSizeMb: HEAP_MIB },
-  });
+  shared[KEY] ??= new Piscina<RefitTask, RefitAnswer>(threadOptions('refit-worker', THREADS, MOST_WAITING));
   return shared[KEY];
 }

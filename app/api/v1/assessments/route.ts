@@ -1,6 +1,6 @@
 /** `POST /api/v1/assessments`: a document in, its assessment out; nothing is stored. */
 import { type AssessmentOutcome, assessDocument } from '@/lib/assessments/assess-document';
-import { limitHeaders } from '@/lib/assessments/limit-headers';
+import { outcomeHeaders } from '@/lib/assessments/limit-headers';
 import { VISITOR } from '@/lib/auth/actor';
 import { env } from '@/lib/env';
 import { problemResponse } from '@/lib/errors';
@@ -27,11 +27,7 @@ export { refuse as DELETE, refuse as GET, refuse as HEAD, refuse as PATCH, refus
 export const OPTIONS = optionsOf('POST');
 
 function responseOf(outcome: AssessmentOutcome): Response {
-  const { quota, retryAfterSeconds } = outcome;
-  const limits = {
-    ...(quota ? limitHeaders(quota) : {}),
-    ...(retryAfterSeconds === undefined ? {} : { 'Retry-After': String(retryAfterSeconds) }),
-  };
+  const limits = outcomeHeaders(outcome);
   if (outcome.kind === 'failed') return problemResponse(outcome.failure, limits);
   const { status, body } = outcome;
   return new Response(body, {

@@ -1,5 +1,5 @@
 /** `POST /api/v1/refits`: a document and what to free in, fitted values out; at once, or under an address of their own. */
-import { limitHeaders } from '@/lib/assessments/limit-headers';
+import { outcomeHeaders } from '@/lib/assessments/limit-headers';
 import { VISITOR } from '@/lib/auth/actor';
 import { env } from '@/lib/env';
 import { problemResponse } from '@/lib/errors';
@@ -27,11 +27,7 @@ export { refuse as DELETE, refuse as GET, refuse as HEAD, refuse as PATCH, refus
 export const OPTIONS = optionsOf('POST');
 
 function responseOf(outcome: RefitOutcome): Response {
-  const { quota, retryAfterSeconds } = outcome;
-  const headers = {
-    ...(quota ? limitHeaders(quota) : {}),
-    ...(retryAfterSeconds === undefined ? {} : { 'Retry-After': String(retryAfterSeconds) }),
-  };
+  const headers = outcomeHeaders(outcome);
   if (outcome.kind === 'failed') return problemResponse(outcome.failure, headers);
   if (outcome.kind === 'answered') return answerResponse(outcome, headers);
   return runningResponse(202, outcome.progress, { ...headers, Location: `/api/v1/refits/${outcome.id}` });
