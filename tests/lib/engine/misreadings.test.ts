@@ -197,11 +197,14 @@ describe('the number of the gap', () => {
     expectClose(natural.gapKT, -3, 1e-14);
     expectClose(natural.points[0].energyU, 0.1, 1e-12);
   });
-  it('log-ratio: none of an energy, none beyond 200 kT', () => {
+  it('log-ratio: none of an energy, none beyond 200 kT or 1e30, which no document may state', () => {
     expect(read(dataset(), { misreading: 'log-ratio', base: '10' })).toBeNull();
-    const large = dataset({ gap: { value: 90, unit: 'ratio', orientation: 'inactive-over-active' } });
-    expect(read(large, { misreading: 'log-ratio', base: '10' })).toBeNull();
-    expect(read(large, { misreading: 'log-ratio', base: 'e' })).not.toBeNull();
+    const ratio = (value: number) =>
+      dataset({ gap: { value, unit: 'ratio', orientation: 'inactive-over-active' } });
+    expect(read(ratio(90), { misreading: 'log-ratio', base: '10' })).toBeNull();
+    expect(read(ratio(60), { misreading: 'log-ratio', base: '10' })).toBeNull();
+    expect(read(ratio(60), { misreading: 'log-ratio', base: 'e' })).not.toBeNull();
+    expect(read(ratio(90), { misreading: 'log-ratio', base: 'e' })).toBeNull();
   });
 });
 
