@@ -242,10 +242,12 @@ describeInBrowser('browsing', ({ newPage, url }) => {
       await page.goto(url('/datasets'));
       const { total } = await askList(url(''), '?system=alrq-velline');
       await page.getByRole('link', { name: 'AlrQ' }).first().click();
+      // Without script nothing else tells that the next page is there.
+      await page.waitForURL(/system=alrq-velline/);
       expect(await headOf(page)).toBe(`${total.datasets} datasets, one curve`);
       await page.getByRole('searchbox').fill('hinge');
       await page.getByRole('button', { name: 'Search' }).click();
-      expect(new URL(page.url()).search).toContain('q=hinge');
+      await page.waitForURL(/q=hinge/);
       expect(new URL(page.url()).search).toContain('system=alrq-velline');
       await page.close();
     });

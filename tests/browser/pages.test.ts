@@ -31,7 +31,7 @@ const smallTargetsIn = (page: Page) =>
     return [...document.querySelectorAll('a, button, summary, input, select, textarea, [role=slider]')]
       .filter((element) => element.checkVisibility() && !isWithinSentence(element))
       .flatMap((element) => {
-        const isSkipLink = element.matches('a[href="#main"]');
+        const isSkipLink = element.matches('a[href="#main"], a[href="#datasets"]');
         const area = element.matches('input[type=radio], input[type=checkbox], input[type=file]')
           ? (element.closest('label') ?? element)
           : element;
