@@ -37,6 +37,8 @@ export interface WhyItMisses {
 }
 
 const NOTHING_EXPLAINS = 'No single misreading and no offset, slope, ceiling, floor or stock explains it.';
+/** AIC by which an alternative is clearly better than what was stated. */
+const CLEARLY_BETTER = -8;
 /** RMS z beyond which a reading improves a series without explaining it. */
 const STILL_MISSES = 1.5;
 const NO_TEST = 'Its parameters were fitted to these very points, so it is no test of the curve.';
@@ -63,16 +65,18 @@ export function whyItMisses(data: PlotData): WhyItMisses {
 function commonOffset({ series }: PlotData): Reason[] {
   const tests = series.filter(({ assessed }) => assessed.origin !== 'fitted-here');
   const offsets = tests.flatMap(({ assessed: { shape } }) => {
-    const best = shape ? namedAlternative(shape) : null;
-    return best?.kind === 'offset' ? [best.estimates[0].value] : [];
+    const offset = shape?.alternatives.find(({ kind }) => kind === 'offset');
+    return offset && offset.deltaAIC <= CLEARLY_BETTER ? [offset.estimates[0].value] : [];
   });
   const [low, high] = [Math.min(...offsets), Math.max(...offsets)];
-  if (tests.length < 2 || offsets.length < tests.length || low * high < 0) return [];
+  // Alike: of one sign, and none more than twice another.
+  const isAlike = low * high > 0 && Math.max(low / high, high / low) <= 2;
+  if (tests.length < 2 || offsets.length < tests.length || !isAlike) return [];
   const range = `${formatFixed(low, 2)} to ${formatFixed(high, 2)}\u00a0kT`;
   return [
     {
       key: 'common offset',
-      text: `Each would lie on the curve with an offset of the same sign, ${range}: look for a cause that they share.`,
+      text: `Each is brought nearer to the curve by an offset of ${range}: look for a cause that they share.`,
       strong: range,
       trial: null,
       short: null,

@@ -222,3 +222,28 @@ describe('whether anything is said', () => {
     expect(whyItMisses(data).series).toEqual([]);
   });
 });
+
+describe('an offset that all series have', () => {
+  const places = reasoned({}).series.length;
+  const offsets = (values: readonly number[]) =>
+    Object.fromEntries(
+      values.map((value, i) => [i, { ...MISSES, ...shapeOf('offset', ['offset', value, 0.08]) }]),
+    );
+  const shared = (values: readonly number[]) =>
+    whyItMisses(reasoned({ series: offsets(values) })).dataset.map(({ text }) => plain(text));
+
+  it('is said once, as a cause to look for', () => {
+    const values = Array.from({ length: places }, (_, i) => -1.2 + i / 100);
+    const range = `−1.20 to −${(1.2 - (places - 1) / 100).toFixed(2)} kT`;
+    expect(shared(values)).toEqual([
+      `Each is brought nearer to the curve by an offset of ${range}: look for a cause that they share.`,
+    ]);
+  });
+
+  it('is not said where one differs in sign or size, or has none', () => {
+    const like = Array.from({ length: places }, () => -1.2);
+    expect(shared([...like.slice(1), 1.2])).toEqual([]);
+    expect(shared([...like.slice(1), -3])).toEqual([]);
+    expect(shared(like.slice(1))).toEqual([]);
+  });
+});

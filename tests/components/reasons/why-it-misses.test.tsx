@@ -34,6 +34,28 @@ describe('why it misses', () => {
     expect(renderToStaticMarkup(<WhyItMisses stated={reasoned({})} trials={trialsOf()} />)).toBe('');
   });
 
+  it('says so where points miss and no series does', () => {
+    const lone = (offCurve: number) =>
+      wordsOf(
+        renderToStaticMarkup(
+          <WhyItMisses stated={reasoned({ summary: { offCurve } })} trials={trialsOf()} />,
+        ),
+      );
+    expect(lone(1)).toContain('One point misses; no series does as a whole');
+    expect(lone(3)).toContain('3 points miss; no series does as a whole');
+  });
+
+  it('says of a reading that leaves a clear miss that it does', () => {
+    const nearer = { ...FOUND, rmsZ: 1.82 };
+    const html = renderToStaticMarkup(
+      <WhyItMisses
+        stated={reasoned({ series: { 0: { rmsZ: 7.6, pValue: 0, conventions: [nearer] } } })}
+        trials={trialsOf()}
+      />,
+    );
+    expect(wordsOf(html)).toContain('to 1.82: nearer, but not onto the curve.');
+  });
+
   it('has the series, its RMS z, the sentence and its actions, each named for whom it is', () => {
     const html = renderToStaticMarkup(
       <WhyItMisses stated={REVERSED} trials={trialsOf()} onState={vi.fn()} />,
