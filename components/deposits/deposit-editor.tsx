@@ -19,6 +19,7 @@ import { DraftBar } from './draft-bar';
 import { DraftCollapse } from './draft-collapse';
 import { DraftReasons, useDraftReasons } from './draft-reasons';
 import { DraftStatus, DraftVerdict } from './draft-status';
+import { DraftTables } from './draft-tables';
 import { listOf, objectOf, readDraft, textOf } from './draft-value';
 import { EditorSections } from './editor-sections';
 import { ErrorList } from './error-list';
@@ -278,6 +279,9 @@ export function DepositEditor({ deposit, text, files, systems }: DepositEditorPr
             </ScrollingCell>
           }
         />
+        {assessed && edit === null ? (
+          <DraftTables data={assessed.data} reasons={reasons} isStale={isStale} />
+        ) : null}
       </div>
     </div>
   );

@@ -17,7 +17,7 @@ interface Restated {
   before: DraftContent;
 }
 
-interface DraftReasonsState {
+export interface DraftReasonsState {
   trials: Trials;
   /** null while the reading cannot be stated: the reasons are of another state of the draft, or text is edited */
   onState: ((reading: StatedReading) => void) | null;
