@@ -16,7 +16,9 @@ export function DraftTables({ data, reasons: { trials }, isStale }: DraftTablesP
   return (
     <div className="page-width">
       {isStale ? (
-        <p className="border-hairline border-t pt-4 text-sm text-soft">Of the draft as it was last saved.</p>
+        <p className="border-hairline border-t pt-4 text-sm text-soft">
+          Table and refit are from the last saved version, not from what was typed since.
+        </p>
       ) : null}
       <DerivedTable data={trials.trial?.data ?? data} isTrial={trials.trial !== null} />
       <RefitSection data={data} trials={trials} />
