@@ -288,7 +288,7 @@ describe('A09 the master curve at extreme energies (analytic)', () => {
   });
 });
 
-describe('A10 a binding curve deposited as activity (Severinghaus, J Appl Physiol 46, 599, 1979: equation 1 from its abstract, Table 1 from a transcription)', () => {
+describe('A10 a binding curve deposited as activity (Severinghaus, J Appl Physiol 46, 599, 1979: equation 1 from its abstract, Table 1 from a published copy)', () => {
   const check = checks.checks.find(({ id }) => id === 'A10');
   const table = check?.inputs as unknown as { table_pO2_Torr: number[]; table_S_percent: number[] };
   const wanted = figures('A10') as unknown as Record<string, string> & { S: Record<string, string> };
